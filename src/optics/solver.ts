@@ -1,0 +1,288 @@
+/**
+ * One direction, many wavelengths: layers → packets → reflectance and emission, kept between calls.
+ *
+ * Everything a layer, a packet or a level of the adding recursion depends on is compared with the call before, and only
+ * what changed is computed again: a search that turns one film recomputes that film, its two packets and the levels above
+ * it; a cone that moves in azimuth alone keeps every isotropic layer. Give each direction of a search a solver of its own.
+ */
+import { addPacket, type Below, createBelow, reflectUnpolarized } from './adding.js'
+import { fillDiagonalModes } from './diagonalModes.js'
+import { Joiner } from './joining.js'
+import { createLayerModes, type LayerModes } from './layerModes.js'
+import { createMedium, type Medium, type OpticalLayer, type PanelEnd } from './opticalLayer.js'
+import { createPacket, faceBetween, type Packet } from './packet.js'
+import { type EmissionStokes, fillMirror } from './panel.js'
+import { fillPlanarModes } from './planarModes.js'
+import { fillTiltedModes } from './tiltedModes.js'
+
+const UNPOLARIZED: EmissionStokes = [1, 0, 0, 0]
+
+/** A medium's matrices and what they were computed from. */
+interface Slot {
+  medium: Medium | undefined
+  thicknessNm: number
+  relativeAzimuthRad: number
+  tiltRad: number
+  xi: number
+  readonly modes: LayerModes
+  /** Recomputed in the call at hand. */
+  changed: boolean
+}
+
+/** Slots from the thick medium above to the thick medium below a packet. */
+interface Segment {
+  readonly first: number
+  readonly last: number
+  readonly packet: Packet
+}
+
+export class Solver {
+  /** Reflectance for unpolarized light, n fractions. */
+  readonly reflectance: Float64Array
+  /** Reflectance of the first packet alone (air to the first thick layer), n fractions. */
+  readonly frontReflectance: Float64Array
+  /** Light emitted to the eye, `4 n` numbers on the coherency vector of the tangential field in air. */
+  private readonly emitted: Float64Array
+  private readonly waveNumbers: Float64Array
+  private readonly air: Medium
+  private readonly joiner: Joiner
+  private readonly face: Packet
+  private slots: Slot[] = []
+  private segments: Segment[] = []
+  private levels: Below[] = []
+  private structure = ''
+  private panel: PanelEnd | undefined
+  private stokes: EmissionStokes = UNPOLARIZED
+  private panelXi = Number.NaN
+  private cosTheta = 1
+
+  constructor(readonly wavelengthsNm: Float64Array) {
+    const n = wavelengthsNm.length
+    this.reflectance = new Float64Array(n)
+    this.frontReflectance = new Float64Array(n)
+    this.emitted = new Float64Array(4 * n)
+    this.waveNumbers = wavelengthsNm.map((nm) => (2 * Math.PI) / nm)
+    const one = { n: new Float64Array(n).fill(1), k: new Float64Array(n) }
+    this.air = createMedium(one, one, one)
+    this.joiner = new Joiner(n)
+    this.face = createPacket(n)
+  }
+
+  /**
+   * Computes `reflectance`, `frontReflectance` and the emission seen from (theta, phi), theta in [0, π/2).
+   * `stokes` is the state a mirror panel emits in the (p, s) frame.
+   */
+  solve(
+    layers: readonly OpticalLayer[],
+    panel: PanelEnd,
+    thetaRad: number,
+    phiRad: number,
+    stokes: EmissionStokes = UNPOLARIZED,
+  ): void {
+    const n = this.wavelengthsNm.length
+    const xi = Math.sin(thetaRad)
+    this.cosTheta = Math.cos(thetaRad)
+    this.arrange(layers, panel)
+    this.updateSlot(0, this.air, 0, 0, 0, xi)
+    for (let k = 0; k < layers.length; k++) {
+      const layer = layers[k]
+      this.updateSlot(k + 1, layer.medium, layer.azimuthRad - phiRad, layer.tiltRad, layer.thicknessNm, xi)
+    }
+    let stale = this.updatePanel(layers.length + 1, panel, xi, stokes)
+    const top = this.segments.length - 1
+    for (let j = 0; j <= top; j++) {
+      const renewed = this.updatePacket(j)
+      stale = stale || renewed
+      if (!stale) continue
+      const packet = this.segments[j].packet
+      if (j < top) addPacket(packet, this.levels[j], this.levels[j + 1], n)
+      else {
+        reflectUnpolarized(packet, this.levels[j], this.cosTheta, this.reflectance, this.emitted, n)
+        if (renewed) this.fillFrontReflectance(packet.r)
+      }
+    }
+  }
+
+  /** Flux that leaves to the eye for unit flux emitted in the immersion medium, n fractions, into `out`. Mirror panels only. */
+  emissionTransmittance(out: Float64Array): void {
+    const n = this.wavelengthsNm.length
+    const c2 = this.cosTheta * this.cosTheta
+    for (let i = 0; i < n; i++) out[i] = (this.emitted[i] / c2 + this.emitted[n + i]) * this.fluxFactor(i)
+  }
+
+  /**
+   * Stokes vector of what leaves to the eye for unit emitted flux, `4 n` numbers (S0 is the emission transmittance), in the
+   * frame Ep = Ex'/cos θ, Es = Ey' of the solver; S3 = -2 Im Ep Es*. Mirror panels only.
+   */
+  emissionStokes(out: Float64Array): void {
+    const n = this.wavelengthsNm.length
+    const c = this.cosTheta
+    for (let i = 0; i < n; i++) {
+      const factor = this.fluxFactor(i)
+      const p = this.emitted[i] / (c * c)
+      const s = this.emitted[n + i]
+      out[i] = (p + s) * factor
+      out[n + i] = (p - s) * factor
+      out[2 * n + i] = (2 * this.emitted[2 * n + i] * factor) / c
+      out[3 * n + i] = (-2 * this.emitted[3 * n + i] * factor) / c
+    }
+  }
+
+  /**
+   * Mueller matrix of reflection, `16 n` numbers (row-major components). Both beams are described by Ep = Ex'/cos θ,
+   * Es = Ey' of the solver frame: S = (|Ep|² + |Es|², |Ep|² - |Es|², 2 Re Ep Es*, -2 Im Ep Es*).
+   */
+  mueller(out: Float64Array): void {
+    const n = this.wavelengthsNm.length
+    const top = this.segments.length - 1
+    const whole = createBelow(n)
+    addPacket(this.segments[top].packet, this.levels[top], whole, n)
+    const c = this.cosTheta
+    // Columns: coherency vector of each Stokes component; rows: back again.
+    const into = [c * c, 1, c, -c]
+    const w = whole.w
+    for (let i = 0; i < n; i++) {
+      for (let row = 0; row < 4; row++) {
+        const x = w[4 * row * n + i] * into[0]
+        const y = w[(4 * row + 1) * n + i] * into[1]
+        out[4 * row * n + i] = (x + y) / 2
+        out[(4 * row + 1) * n + i] = (x - y) / 2
+        out[(4 * row + 2) * n + i] = (w[(4 * row + 2) * n + i] * into[2]) / 2
+        out[(4 * row + 3) * n + i] = (w[(4 * row + 3) * n + i] * into[3]) / 2
+      }
+      for (let column = 0; column < 4; column++) {
+        const p = out[column * n + i] / (c * c)
+        const s = out[(4 + column) * n + i]
+        out[column * n + i] = p + s
+        out[(4 + column) * n + i] = p - s
+        out[(8 + column) * n + i] *= 2 / c
+        out[(12 + column) * n + i] *= -2 / c
+      }
+    }
+  }
+
+  /** cos θ in air over m cos θm in the immersion medium: from tangential fields to flux. */
+  private fluxFactor(i: number): number {
+    const panel = this.panel
+    if (panel === undefined || panel.kind !== 'mirror') return Number.NaN
+    const m2 = panel.index[i] * panel.index[i]
+    return this.cosTheta / Math.sqrt(m2 - this.panelXi * this.panelXi)
+  }
+
+  /** Lays out slots, packets and levels anew where layers came, went, or changed between coherent and thick. */
+  private arrange(layers: readonly OpticalLayer[], panel: PanelEnd): void {
+    let structure: string = panel.kind
+    for (const layer of layers) structure += layer.coherent ? 'c' : 't'
+    if (structure === this.structure) return
+    this.structure = structure
+    const n = this.wavelengthsNm.length
+    const end = layers.length + 1
+    while (this.slots.length > end + 1) this.slots.pop()
+    while (this.slots.length < end + 1) this.slots.push(createSlot(n))
+    this.segments = []
+    let last = end
+    for (let k = end - 1; k >= 0; k--) {
+      if (k > 0 && layers[k - 1].coherent) continue
+      this.segments.push({ first: k, last, packet: createPacket(n) })
+      last = k
+    }
+    this.levels = this.segments.map(() => createBelow(n))
+    for (const slot of this.slots) slot.medium = undefined
+    this.panel = undefined
+  }
+
+  private updateSlot(k: number, medium: Medium, azimuthRad: number, tilt: number, thicknessNm: number, xi: number): void {
+    const slot = this.slots[k]
+    const tiltRad = medium.isotropic ? 0 : tilt
+    const relativeAzimuthRad = medium.inPlaneIsotropic && tiltRad === 0 ? 0 : azimuthRad
+    slot.changed =
+      slot.medium !== medium ||
+      slot.xi !== xi ||
+      slot.thicknessNm !== thicknessNm ||
+      slot.relativeAzimuthRad !== relativeAzimuthRad ||
+      slot.tiltRad !== tiltRad
+    if (!slot.changed) return
+    slot.medium = medium
+    slot.xi = xi
+    slot.thicknessNm = thicknessNm
+    slot.relativeAzimuthRad = relativeAzimuthRad
+    slot.tiltRad = tiltRad
+    const { modes } = slot
+    if (tiltRad !== 0) {
+      fillTiltedModes(modes, medium, relativeAzimuthRad, tiltRad, thicknessNm, xi, this.waveNumbers)
+    } else if (medium.inPlaneIsotropic) fillDiagonalModes(modes, medium, thicknessNm, xi, this.waveNumbers)
+    else fillPlanarModes(modes, medium, relativeAzimuthRad, thicknessNm, xi, this.waveNumbers)
+  }
+
+  /** The medium at the end and what it sends back; true where that changed. */
+  private updatePanel(k: number, panel: PanelEnd, xi: number, stokes: EmissionStokes): boolean {
+    const same =
+      this.panel === panel && this.panelXi === xi && this.stokes.every((component, index) => component === stokes[index])
+    if (same) {
+      this.slots[k].changed = false
+      return false
+    }
+    const n = this.wavelengthsNm.length
+    const isNewPanel = this.panel !== panel
+    this.panel = panel
+    this.panelXi = xi
+    this.stokes = stokes
+    if (panel.kind === 'metal') {
+      this.updateSlot(k, panel.medium, 0, 0, 0, xi)
+      this.levels[0].w.fill(0)
+      this.levels[0].e.fill(0)
+      return true
+    }
+    if (isNewPanel && !sameIndex(this.slots[k].medium, panel.index)) {
+      const index = { n: panel.index, k: new Float64Array(n) }
+      this.updateSlot(k, createMedium(index, index, index), 0, 0, 0, xi)
+    } else this.updateSlot(k, this.slots[k].medium!, 0, 0, 0, xi)
+    fillMirror(panel, xi, stokes, this.levels[0], n)
+    return true
+  }
+
+  /** Joins the faces and coherent layers of packet j, and the thick layer above it; true where anything in it changed. */
+  private updatePacket(j: number): boolean {
+    const { first, last, packet } = this.segments[j]
+    const n = this.wavelengthsNm.length
+    let changed = false
+    for (let k = first; k <= last; k++) changed = changed || this.slots[k].changed
+    if (!changed) return false
+    faceBetween(this.slots[last - 1].modes, this.slots[last].modes, packet, n)
+    for (let k = last - 1; k > first; k--) {
+      faceBetween(this.slots[k - 1].modes, this.slots[k].modes, this.face, n)
+      this.joiner.join(this.face, this.slots[k].modes, packet)
+    }
+    if (first > 0) this.joiner.fold(packet, this.slots[first].modes)
+    return true
+  }
+
+  /** Unpolarized light on the first packet alone. */
+  private fillFrontReflectance(r: Float64Array): void {
+    const n = this.wavelengthsNm.length
+    const c2 = this.cosTheta * this.cosTheta
+    const power = (component: number, i: number) => r[component * n + i] ** 2 + r[(component + 1) * n + i] ** 2
+    for (let i = 0; i < n; i++) {
+      this.frontReflectance[i] = (power(0, i) + power(6, i) + power(2, i) / c2 + power(4, i) * c2) / 2
+    }
+  }
+}
+
+function createSlot(count: number): Slot {
+  return {
+    medium: undefined,
+    thicknessNm: Number.NaN,
+    relativeAzimuthRad: Number.NaN,
+    tiltRad: Number.NaN,
+    xi: Number.NaN,
+    modes: createLayerModes(count),
+    changed: true,
+  }
+}
+
+/** Same lossless index at every wavelength: a panel whose reflectance alone changed keeps its immersion medium. */
+function sameIndex(medium: Medium | undefined, index: Float64Array): boolean {
+  if (medium === undefined) return false
+  for (let i = 0; i < index.length; i++) if (medium.permittivity[i] !== index[i] * index[i]) return false
+  return true
+}

@@ -4,7 +4,13 @@
  */
 import { indexAt } from '../materials/indexAt.js'
 import { spectrumAt } from '../materials/spectrumAt.js'
-import { createMedium, type IndexSpectrum, type Medium, type OpticalLayer, type PanelEnd } from '../optics/opticalLayer.js'
+import {
+  createMedium,
+  type IndexSpectrum,
+  type Medium,
+  type OpticalLayer,
+  type PanelEnd,
+} from '../optics/opticalLayer.js'
 import type { CrystalLayer, IndexLaw, Layer, Panel, PolarizerLayer, RetarderLayer, Stack } from '../stack/stack.js'
 import { polarizerIndices } from './polarizerIndices.js'
 import { retarderIndices } from './retarderIndices.js'
@@ -66,7 +72,9 @@ export class OpticalStack {
         return createMedium(absorption, transmission, transmission)
       }
       case 'crystal':
-        return createMedium(...(layer.indices.map((law) => this.indexOf(law)) as [IndexSpectrum, IndexSpectrum, IndexSpectrum]))
+        return createMedium(
+          ...(layer.indices.map((law) => this.indexOf(law)) as [IndexSpectrum, IndexSpectrum, IndexSpectrum]),
+        )
     }
   }
 

@@ -38,7 +38,10 @@ function internalTransmittances(
     return [at(layer.transmission_axis_transmittance), at(layer.absorption_axis_transmittance)]
   }
   if (layer.k1 !== undefined) {
-    return [at(layer.k1).map((k1, i) => internalFromAir(k1, n[i])), at(layer.k2).map((k2, i) => internalFromAir(k2, n[i]))]
+    return [
+      at(layer.k1).map((k1, i) => internalFromAir(k1, n[i])),
+      at(layer.k2).map((k2, i) => internalFromAir(k2, n[i])),
+    ]
   }
   const ts = at(layer.single_transmittance)
   const efficiency = at(layer.polarization_efficiency)

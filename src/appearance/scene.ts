@@ -123,4 +123,3 @@ function weigh(weights: Float64Array, spectrum: Float64Array): number {
   for (let i = 0; i < weights.length; i++) sum += weights[i] * spectrum[i]
   return sum
 }
-

@@ -30,7 +30,7 @@ interface Slot {
 }
 
 /** Slots from the thick medium above to the thick medium below a packet. */
-interface Segment {
+export interface Segment {
   readonly first: number
   readonly last: number
   readonly packet: Packet
@@ -48,13 +48,18 @@ export class Solver {
   private readonly joiner: Joiner
   private readonly face: Packet
   private slots: Slot[] = []
-  private segments: Segment[] = []
-  private levels: Below[] = []
+  /** Packets from the panel up, and what lies below each: read by `Sensitivity`. */
+  segments: readonly Segment[] = []
+  levels: readonly Below[] = []
   private structure = ''
   private panel: PanelEnd | undefined
   private stokes: EmissionStokes = UNPOLARIZED
   private panelXi = Number.NaN
-  private cosTheta = 1
+  private layers: readonly OpticalLayer[] = []
+  private phiRad = 0
+  private xi = 0
+  cosTheta = 1
+  private trial: Slot[] = []
 
   constructor(readonly wavelengthsNm: Float64Array) {
     const n = wavelengthsNm.length
@@ -82,6 +87,8 @@ export class Solver {
     const n = this.wavelengthsNm.length
     const xi = Math.sin(thetaRad)
     this.cosTheta = Math.cos(thetaRad)
+    this.xi = xi
+    this.phiRad = phiRad
     this.arrange(layers, panel)
     this.updateSlot(0, this.air, 0, 0, 0, xi)
     for (let k = 0; k < layers.length; k++) {
@@ -89,6 +96,7 @@ export class Solver {
       this.updateSlot(k + 1, layer.medium, layer.azimuthRad - phiRad, layer.tiltRad, layer.thicknessNm, xi)
     }
     let stale = this.updatePanel(layers.length + 1, panel, xi, stokes)
+    this.layers = layers.slice()
     const top = this.segments.length - 1
     for (let j = 0; j <= top; j++) {
       const renewed = this.updatePacket(j)
@@ -162,11 +170,11 @@ export class Solver {
   }
 
   /** cos θ in air over m cos θm in the immersion medium: from tangential fields to flux. */
-  private fluxFactor(i: number): number {
+  fluxFactor(i: number): number {
     const panel = this.panel
     if (panel === undefined || panel.kind !== 'mirror') return Number.NaN
     const m2 = panel.index[i] * panel.index[i]
-    return this.cosTheta / Math.sqrt(m2 - this.panelXi * this.panelXi)
+    return this.cosTheta / Math.sqrt(m2 - this.xi * this.xi)
   }
 
   /** Lays out slots, packets and levels anew where layers came, went, or changed between coherent and thick. */
@@ -179,20 +187,39 @@ export class Solver {
     const end = layers.length + 1
     while (this.slots.length > end + 1) this.slots.pop()
     while (this.slots.length < end + 1) this.slots.push(createSlot(n))
-    this.segments = []
+    const segments: Segment[] = []
     let last = end
     for (let k = end - 1; k >= 0; k--) {
       if (k > 0 && layers[k - 1].coherent) continue
-      this.segments.push({ first: k, last, packet: createPacket(n) })
+      segments.push({ first: k, last, packet: createPacket(n) })
       last = k
     }
-    this.levels = this.segments.map(() => createBelow(n))
+    this.segments = segments
+    this.levels = segments.map(() => createBelow(n))
+    this.trial = []
     for (const slot of this.slots) slot.medium = undefined
     this.panel = undefined
   }
 
-  private updateSlot(k: number, medium: Medium, azimuthRad: number, tilt: number, thicknessNm: number, xi: number): void {
-    const slot = this.slots[k]
+  private updateSlot(
+    k: number,
+    medium: Medium,
+    azimuthRad: number,
+    tilt: number,
+    thicknessNm: number,
+    xi: number,
+  ): void {
+    this.fillSlot(this.slots[k], medium, azimuthRad, tilt, thicknessNm, xi)
+  }
+
+  private fillSlot(
+    slot: Slot,
+    medium: Medium,
+    azimuthRad: number,
+    tilt: number,
+    thicknessNm: number,
+    xi: number,
+  ): void {
     const tiltRad = medium.isotropic ? 0 : tilt
     const relativeAzimuthRad = medium.inPlaneIsotropic && tiltRad === 0 ? 0 : azimuthRad
     slot.changed =
@@ -217,44 +244,89 @@ export class Solver {
   /** The medium at the end and what it sends back; true where that changed. */
   private updatePanel(k: number, panel: PanelEnd, xi: number, stokes: EmissionStokes): boolean {
     const same =
-      this.panel === panel && this.panelXi === xi && this.stokes.every((component, index) => component === stokes[index])
+      this.panel === panel &&
+      this.panelXi === xi &&
+      this.stokes.every((component, index) => component === stokes[index])
     if (same) {
       this.slots[k].changed = false
       return false
     }
-    const n = this.wavelengthsNm.length
-    const isNewPanel = this.panel !== panel
     this.panel = panel
     this.panelXi = xi
     this.stokes = stokes
-    if (panel.kind === 'metal') {
-      this.updateSlot(k, panel.medium, 0, 0, 0, xi)
-      this.levels[0].w.fill(0)
-      this.levels[0].e.fill(0)
-      return true
+    this.updateSlot(k, this.endMedium(panel, this.slots[k].medium), 0, 0, 0, xi)
+    const { w, e } = this.levels[0]
+    if (panel.kind === 'mirror') fillMirror(panel, xi, stokes, this.levels[0], this.wavelengthsNm.length)
+    else {
+      w.fill(0)
+      e.fill(0)
     }
-    if (isNewPanel && !sameIndex(this.slots[k].medium, panel.index)) {
-      const index = { n: panel.index, k: new Float64Array(n) }
-      this.updateSlot(k, createMedium(index, index, index), 0, 0, 0, xi)
-    } else this.updateSlot(k, this.slots[k].medium!, 0, 0, 0, xi)
-    fillMirror(panel, xi, stokes, this.levels[0], n)
     return true
+  }
+
+  /** The medium at the end: the metal, or the immersion of a mirror; `known` again where it is the same. */
+  private endMedium(panel: PanelEnd, known: Medium | undefined): Medium {
+    if (panel.kind === 'metal') return panel.medium
+    if (known !== undefined && sameIndex(known, panel.index)) return known
+    const index = { n: panel.index, k: new Float64Array(panel.index.length) }
+    return createMedium(index, index, index)
   }
 
   /** Joins the faces and coherent layers of packet j, and the thick layer above it; true where anything in it changed. */
   private updatePacket(j: number): boolean {
     const { first, last, packet } = this.segments[j]
-    const n = this.wavelengthsNm.length
     let changed = false
     for (let k = first; k <= last; k++) changed = changed || this.slots[k].changed
-    if (!changed) return false
-    faceBetween(this.slots[last - 1].modes, this.slots[last].modes, packet, n)
+    if (changed) this.joinSegment(this.slots, first, last, packet)
+    return changed
+  }
+
+  private joinSegment(slots: readonly Slot[], first: number, last: number, packet: Packet): void {
+    const n = this.wavelengthsNm.length
+    faceBetween(slots[last - 1].modes, slots[last].modes, packet, n)
     for (let k = last - 1; k > first; k--) {
-      faceBetween(this.slots[k - 1].modes, this.slots[k].modes, this.face, n)
-      this.joiner.join(this.face, this.slots[k].modes, packet)
+      faceBetween(slots[k - 1].modes, slots[k].modes, this.face, n)
+      this.joiner.join(this.face, slots[k].modes, packet)
     }
-    if (first > 0) this.joiner.fold(packet, this.slots[first].modes)
+    if (first > 0) this.joiner.fold(packet, slots[first].modes)
+  }
+
+  /**
+   * Packet j of a stack that differs from the present one in few layers, into `out`, without touching what is kept;
+   * false (and nothing computed) where none of the layers of the packet differs. `phiRad` is that of the last call.
+   */
+  packetOf(j: number, layers: readonly OpticalLayer[], panel: PanelEnd, out: Packet): boolean {
+    const { first, last } = this.segments[j]
+    const n = this.wavelengthsNm.length
+    const end = this.slots.length - 1
+    let differs = false
+    for (let k = Math.max(first, 1); k <= Math.min(last, end - 1); k++) {
+      if (layers[k - 1] !== this.layers[k - 1]) differs = true
+    }
+    if (last === end && panel !== this.panel) differs = true
+    if (!differs) return false
+    while (this.trial.length <= end) this.trial.push(createSlot(n))
+    const mixed = this.slots.slice()
+    for (let k = Math.max(first, 1); k <= Math.min(last, end - 1); k++) {
+      const layer = layers[k - 1]
+      if (layer === this.layers[k - 1]) continue
+      mixed[k] = this.trial[k]
+      this.fillSlot(mixed[k], layer.medium, layer.azimuthRad - this.phiRad, layer.tiltRad, layer.thicknessNm, this.xi)
+    }
+    if (last === end && panel !== this.panel) {
+      mixed[end] = this.trial[end]
+      this.fillSlot(mixed[end], this.endMedium(panel, this.slots[end].medium), 0, 0, 0, this.xi)
+    }
+    this.joinSegment(mixed, first, last, out)
     return true
+  }
+
+  /** What another panel would send back at the present direction. */
+  panelLevel(panel: PanelEnd): Below {
+    const n = this.wavelengthsNm.length
+    const below = createBelow(n)
+    if (panel.kind === 'mirror') fillMirror(panel, this.xi, this.stokes, below, n)
+    return below
   }
 
   /** Unpolarized light on the first packet alone. */

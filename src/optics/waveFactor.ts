@@ -57,7 +57,8 @@ export function refineFactor(quartic: Float64Array, forward: Float64Array, backw
     const change = Math.abs(dsRe) + Math.abs(dsIm) + Math.abs(dpRe) + Math.abs(dpIm)
     const size = 1 + Math.abs(sRe) + Math.abs(sIm) + Math.abs(pRe) + Math.abs(pIm)
     if (!(change < 1e6 * size)) return false
-    if (change <= SMALL * size * 4 || (step > 8 && change <= 1e-13 * size)) return forward[0] + forward[1] > backward[0] + backward[1]
+    if (change <= SMALL * size * 4 || (step > 8 && change <= 1e-13 * size))
+      return forward[0] + forward[1] > backward[0] + backward[1]
   }
   return false
 }

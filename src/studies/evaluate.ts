@@ -1,7 +1,8 @@
 /** How dark, how neutral, at what cost: one stack from the directions of its conditions, and its limits. */
-import { chroma } from '../color/cielab.js'
+
 import { metricValue } from '../appearance/metric.js'
 import { type Look, Scene } from '../appearance/scene.js'
+import { chroma } from '../color/cielab.js'
 import type { Limit, MetricName, Stack } from '../stack/stack.js'
 
 export interface Evaluation {
@@ -104,7 +105,10 @@ export function evaluateLimit(scene: Scene, stack: Stack, limit: Limit): LimitEv
 
 /** How far `value` lies inside the limit, in the metric's unit; negative where it is missed. */
 export function limitMargin({ max, min }: Limit, value: number): number {
-  return Math.min(max === undefined ? Number.POSITIVE_INFINITY : max - value, min === undefined ? Number.POSITIVE_INFINITY : value - min)
+  return Math.min(
+    max === undefined ? Number.POSITIVE_INFINITY : max - value,
+    min === undefined ? Number.POSITIVE_INFINITY : value - min,
+  )
 }
 
 /** Degrees without the rounding noise of a conversion there and back (45 deg stays 45). */

@@ -27,6 +27,10 @@ export class Joiner {
   /** Takes the layer with `modes` on top of `packet` into the packet: r ← P' r P, t ← t P, tUp ← P' tUp. In place. */
   fold(packet: Packet, modes: LayerModes): void {
     const n = this.count
+    if (modes.diagonal) {
+      foldDiagonal(packet, modes.p, n)
+      return
+    }
     const { a } = this
     const pBack = modes.tilted ? modes.pBack : modes.p
     multiply2(packet.r, modes.p, a, n)
@@ -35,7 +39,7 @@ export class Joiner {
     packet.t.set(a)
     multiply2(pBack, packet.tUp, a, n)
     packet.tUp.set(a)
-    packet.diagonal = packet.diagonal && modes.diagonal
+    packet.diagonal = false
   }
 
   /** packet ← face · layer · packet, the coherent layer between them. In place. */
@@ -64,6 +68,35 @@ export class Joiner {
     add2(folded.rBelow, a, packet.rBelow, n)
     packet.diagonal = face.diagonal && folded.diagonal
   }
+}
+
+/** fold for P = diag(p, s): rows and columns are scaled. */
+function foldDiagonal({ r, t, tUp }: Packet, p: Float64Array, n: number): void {
+  for (let i = 0; i < n; i++) {
+    const pRe = p[i]
+    const pIm = p[n + i]
+    const sRe = p[6 * n + i]
+    const sIm = p[7 * n + i]
+    scaleAt(r, 0, n, i, pRe * pRe - pIm * pIm, 2 * pRe * pIm)
+    scaleAt(r, 2, n, i, pRe * sRe - pIm * sIm, pRe * sIm + pIm * sRe)
+    scaleAt(r, 4, n, i, pRe * sRe - pIm * sIm, pRe * sIm + pIm * sRe)
+    scaleAt(r, 6, n, i, sRe * sRe - sIm * sIm, 2 * sRe * sIm)
+    scaleAt(t, 0, n, i, pRe, pIm)
+    scaleAt(t, 2, n, i, sRe, sIm)
+    scaleAt(t, 4, n, i, pRe, pIm)
+    scaleAt(t, 6, n, i, sRe, sIm)
+    scaleAt(tUp, 0, n, i, pRe, pIm)
+    scaleAt(tUp, 2, n, i, pRe, pIm)
+    scaleAt(tUp, 4, n, i, sRe, sIm)
+    scaleAt(tUp, 6, n, i, sRe, sIm)
+  }
+}
+
+function scaleAt(m: Float64Array, component: number, n: number, i: number, re: number, im: number): void {
+  const k = component * n + i
+  const mRe = m[k]
+  m[k] = mRe * re - m[k + n] * im
+  m[k + n] = mRe * im + m[k + n] * re
 }
 
 function addIdentity(a: Float64Array, n: number): void {

@@ -16,6 +16,7 @@
  * packets the parameter touches: exact to the square of the step.
  */
 import { coherencyMatrix } from './coherency.js'
+import { apply, applyRow, RoundTrips } from './matrix4.js'
 import type { OpticalLayer, PanelEnd } from './opticalLayer.js'
 import { createPacket, type Packet } from './packet.js'
 import type { Solver } from './solver.js'
@@ -26,7 +27,7 @@ const PARTS = ['r', 't', 'rBelow', 'tUp'] as const
 
 const M = new Float64Array(16)
 const W = new Float64Array(16)
-const A = new Float64Array(16)
+const TRIPS = new RoundTrips()
 const ROW = new Float64Array(4)
 const V = new Float64Array(4)
 const U = new Float64Array(4)
@@ -34,6 +35,7 @@ const X = new Float64Array(4)
 const Z = new Float64Array(4)
 const E = new Float64Array(4)
 const A_UP = new Float64Array(4)
+const Y = new Float64Array(4)
 
 /** Follows one solver; `prepare` after each of its calls, then `derivative` for each parameter. */
 export class Sensitivity {
@@ -55,6 +57,7 @@ export class Sensitivity {
   /** One pass from the top down at the solver's present state, for the response asked. */
   prepare(response: Response): void {
     const { segments, levels, cosTheta } = this.solver
+    this.solver.fillLevels(segments.length - 1)
     const n = this.solver.wavelengthsNm.length
     while (this.adjoints.length < segments.length) this.adjoints.push(createPacket(n))
     const c2 = cosTheta * cosTheta
@@ -124,20 +127,15 @@ export class Sensitivity {
     applyRow(U, M, ROW) // u tUp
     applyRow(ROW, W, Z)
     coherencyMatrix(packet.rBelow, i, n, M)
-    for (let row = 0; row < 4; row++) {
-      for (let column = 0; column < 4; column++) {
-        let sum = row === column ? 1 : 0
-        for (let k = 0; k < 4; k++) sum -= M[4 * row + k] * W[4 * k + column]
-        A[4 * row + column] = sum
-      }
-      for (let k = 0; k < 4; k++) X[row] += M[4 * row + k] * E[k]
-    }
-    solveBoth(A, X, Z)
+    TRIPS.factor(M, W)
+    apply(M, E, A_UP)
+    for (let c = 0; c < 4; c++) X[c] += A_UP[c]
+    TRIPS.solve(X)
+    TRIPS.solveRow(Z)
     apply(W, X, A_UP)
     for (let c = 0; c < 4; c++) A_UP[c] += E[c]
-    for (let column = 0; column < 4; column++) {
-      for (let k = 0; k < 4; k++) ROW[column] += Z[k] * M[4 * k + column]
-    }
+    applyRow(Z, M, Y)
+    for (let c = 0; c < 4; c++) ROW[c] += Y[c]
   }
 
   private addPanelChange(plus: PanelEnd, minus: PanelEnd, twoH: number, out: Float64Array): void {
@@ -165,44 +163,6 @@ function setVector(out: Float64Array, a: number, b: number, c: number, d: number
   out[1] = b
   out[2] = c
   out[3] = d
-}
-
-/** out = m x. */
-function apply(m: Float64Array, x: Float64Array, out: Float64Array): void {
-  for (let row = 0; row < 4; row++) {
-    const k = 4 * row
-    out[row] = m[k] * x[0] + m[k + 1] * x[1] + m[k + 2] * x[2] + m[k + 3] * x[3]
-  }
-}
-
-/** out = x m, x a row. */
-function applyRow(x: Float64Array, m: Float64Array, out: Float64Array): void {
-  for (let column = 0; column < 4; column++) {
-    out[column] = x[0] * m[column] + x[1] * m[4 + column] + x[2] * m[8 + column] + x[3] * m[12 + column]
-  }
-}
-
-/** x ← a⁻¹ x (column) and z ← z a⁻¹ (row); `a` is overwritten by its factors. No pivoting: see `adding`. */
-function solveBoth(a: Float64Array, x: Float64Array, z: Float64Array): void {
-  for (let k = 0; k < 4; k++) {
-    const pivot = 1 / a[5 * k]
-    for (let row = k + 1; row < 4; row++) {
-      a[4 * row + k] *= pivot
-      for (let column = k + 1; column < 4; column++) a[4 * row + column] -= a[4 * row + k] * a[4 * k + column]
-    }
-  }
-  for (let row = 1; row < 4; row++) for (let k = 0; k < row; k++) x[row] -= a[4 * row + k] * x[k]
-  for (let row = 3; row >= 0; row--) {
-    for (let k = row + 1; k < 4; k++) x[row] -= a[4 * row + k] * x[k]
-    x[row] /= a[5 * row]
-  }
-  for (let column = 0; column < 4; column++) {
-    for (let k = 0; k < column; k++) z[column] -= z[k] * a[4 * k + column]
-    z[column] /= a[5 * column]
-  }
-  for (let column = 2; column >= 0; column--) {
-    for (let k = column + 1; k < 4; k++) z[column] -= z[k] * a[4 * k + column]
-  }
 }
 
 /**

@@ -5,7 +5,8 @@
  * what changed is computed again: a search that turns one film recomputes that film, its two packets and the levels above
  * it; a cone that moves in azimuth alone keeps every isotropic layer. Give each direction of a search a solver of its own.
  */
-import { addPacket, type Below, createBelow, reflectUnpolarized } from './adding.js'
+import { type Above, closeStack, createAbove, extendAbove, extendAboveDiagonal, startAbove } from './above.js'
+import { addPacket, type Below, createBelow } from './adding.js'
 import { fillDiagonalModes } from './diagonalModes.js'
 import { Joiner } from './joining.js'
 import { createLayerModes, type LayerModes } from './layerModes.js'
@@ -51,12 +52,18 @@ export class Solver {
   /** Packets from the panel up, and what lies below each: read by `Sensitivity`. */
   segments: readonly Segment[] = []
   levels: readonly Below[] = []
+  /** Levels up to this one hold. */
+  private levelsKept = 0
+  private readonly above: Above
+  /** Highest packet that changed in the call before. */
+  private highestBefore = -1
   private structure = ''
   private panel: PanelEnd | undefined
   private stokes: EmissionStokes = UNPOLARIZED
   private panelXi = Number.NaN
   private layers: readonly OpticalLayer[] = []
   private phiRad = 0
+  private thetaRad = Number.NaN
   private xi = 0
   cosTheta = 1
   private trial: Slot[] = []
@@ -71,6 +78,7 @@ export class Solver {
     this.air = createMedium(one, one, one)
     this.joiner = new Joiner(n)
     this.face = createPacket(n)
+    this.above = createAbove(n)
   }
 
   /**
@@ -86,6 +94,8 @@ export class Solver {
   ): void {
     const n = this.wavelengthsNm.length
     const xi = Math.sin(thetaRad)
+    if (thetaRad !== this.thetaRad) this.above.from = -1
+    this.thetaRad = thetaRad
     this.cosTheta = Math.cos(thetaRad)
     this.xi = xi
     this.phiRad = phiRad
@@ -95,20 +105,50 @@ export class Solver {
       const layer = layers[k]
       this.updateSlot(k + 1, layer.medium, layer.azimuthRad - phiRad, layer.tiltRad, layer.thicknessNm, xi)
     }
-    let stale = this.updatePanel(layers.length + 1, panel, xi, stokes)
     this.layers = layers.slice()
+    const panelChanged = this.updatePanel(layers.length + 1, panel, xi, stokes)
+    let lowest = panelChanged ? 0 : Number.POSITIVE_INFINITY
+    let highest = -1
     const top = this.segments.length - 1
     for (let j = 0; j <= top; j++) {
-      const renewed = this.updatePacket(j)
-      stale = stale || renewed
-      if (!stale) continue
-      const packet = this.segments[j].packet
-      if (j < top) addPacket(packet, this.levels[j], this.levels[j + 1], n)
-      else {
-        reflectUnpolarized(packet, this.levels[j], this.cosTheta, this.reflectance, this.emitted, n)
-        if (renewed) this.fillFrontReflectance(packet.r)
+      if (!this.updatePacket(j)) continue
+      lowest = Math.min(lowest, j)
+      highest = j
+    }
+    if (lowest > top) return
+    if (highest === top) this.fillFrontReflectance(this.segments[top].packet.r)
+    this.levelsKept = Math.min(this.levelsKept, lowest)
+    this.renewAbove(highest)
+    this.fillLevels(this.above.from)
+    closeStack(this.above, this.levels[this.above.from], this.cosTheta ** 2, this.reflectance, this.emitted, n)
+  }
+
+  /**
+   * Keeps the block above the changes. Where the same packets change time after time it is grown down to them, so that
+   * the calls that follow do not climb through what stays.
+   */
+  private renewAbove(highest: number): void {
+    const { above, segments } = this
+    const n = this.wavelengthsNm.length
+    const c2 = this.cosTheta ** 2
+    const top = segments.length - 1
+    if (above.from < 0 || highest >= above.from) {
+      startAbove(above, segments[top].packet, top, c2, n)
+      for (let j = top; segments[j].packet.diagonal && j > 0 && segments[j - 1].packet.diagonal; j--) {
+        extendAboveDiagonal(above, segments[j - 1].packet, c2, n)
       }
     }
+    const repeated = highest === this.highestBefore
+    this.highestBefore = highest
+    if (!repeated) return
+    while (above.from > highest + 1) extendAbove(above, segments[above.from - 1].packet, c2, n)
+  }
+
+  /** Brings the adding recursion up to level `to` (what lies below packet `to`). */
+  fillLevels(to: number): void {
+    const n = this.wavelengthsNm.length
+    for (let j = this.levelsKept; j < to; j++) addPacket(this.segments[j].packet, this.levels[j], this.levels[j + 1], n)
+    this.levelsKept = Math.max(this.levelsKept, to)
   }
 
   /** Flux that leaves to the eye for unit flux emitted in the immersion medium, n fractions, into `out`. Mirror panels only. */
@@ -142,13 +182,11 @@ export class Solver {
    */
   mueller(out: Float64Array): void {
     const n = this.wavelengthsNm.length
-    const top = this.segments.length - 1
-    const whole = createBelow(n)
-    addPacket(this.segments[top].packet, this.levels[top], whole, n)
+    this.fillLevels(this.segments.length)
     const c = this.cosTheta
     // Columns: coherency vector of each Stokes component; rows: back again.
     const into = [c * c, 1, c, -c]
-    const w = whole.w
+    const w = this.levels[this.segments.length].w
     for (let i = 0; i < n; i++) {
       for (let row = 0; row < 4; row++) {
         const x = w[4 * row * n + i] * into[0]
@@ -195,7 +233,10 @@ export class Solver {
       last = k
     }
     this.segments = segments
-    this.levels = segments.map(() => createBelow(n))
+    this.levels = [...segments, undefined].map(() => createBelow(n))
+    this.levelsKept = 0
+    this.above.from = -1
+    this.highestBefore = -1
     this.trial = []
     for (const slot of this.slots) slot.medium = undefined
     this.panel = undefined

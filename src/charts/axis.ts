@@ -4,7 +4,7 @@ import type { Theme } from './theme.js'
 
 export interface AxisText {
   /** With its unit; empty for an axis that says itself. */
-  readonly title: string
+  readonly title: string | readonly string[]
   readonly min?: number
   readonly max?: number
   readonly suggestedMin?: number
@@ -14,11 +14,11 @@ export interface AxisText {
   readonly grid?: boolean
   /** Room between the axis and its numbers, px. */
   readonly tickGapPx?: number
-  /** Text at a tick in place of the number. */
-  readonly tickText?: (value: number) => string
   /** Share of the height among panels that stand on one another. */
   readonly panelWeight?: number
 }
+
+const TITLE_GAP_PX = 4
 
 export type Axis = NonNullable<ChartOptions['scales']>[string]
 
@@ -26,7 +26,14 @@ export type Axis = NonNullable<ChartOptions['scales']>[string]
 function axisLook(theme: Theme, text: AxisText) {
   const { family, textSize } = theme
   return {
-    title: { display: text.title !== '', text: text.title, color: theme.ink, font: { family, size: textSize } },
+    title: {
+      display: text.title !== '',
+      text: typeof text.title === 'string' ? text.title : [...text.title],
+      color: theme.ink,
+      font: { family, size: textSize },
+      // Chart.js counts the room between axis and numbers twice.
+      padding: { top: TITLE_GAP_PX - (text.tickGapPx ?? 0), bottom: TITLE_GAP_PX },
+    },
     grid: {
       display: text.grid ?? true,
       color: theme.grid,
@@ -34,12 +41,11 @@ function axisLook(theme: Theme, text: AxisText) {
       tickLength: text.tickGapPx ? 0 : 6,
     },
     border: { color: theme.faint },
-    ...(text.panelWeight ? { stack: 'panels', stackWeight: text.panelWeight } : {}),
+    ...(text.panelWeight ? { axis: 'y' as const, stack: 'panels', stackWeight: text.panelWeight } : {}),
   }
 }
 
 export function linearAxis(theme: Theme, text: AxisText): Axis {
-  const { tickText } = text
   return {
     type: 'linear',
     ...axisLook(theme, text),
@@ -52,13 +58,11 @@ export function linearAxis(theme: Theme, text: AxisText): Axis {
       font: { family: theme.family, size: theme.textSize },
       padding: text.tickGapPx ?? 3,
       maxRotation: 0,
-      autoSkipPadding: 14,
+      autoSkipPadding: 8,
       ...(text.step === undefined ? {} : { stepSize: text.step }),
       includeBounds: false,
       callback: (value: number | string, _index: number, ticks: readonly { value: number }[]) =>
-        tickText
-          ? tickText(Number(value))
-          : stepText(Number(value), ticks.length > 1 ? ticks[1].value - ticks[0].value : 1),
+        stepText(Number(value), ticks.length > 1 ? ticks[1].value - ticks[0].value : 1),
     },
   }
 }
@@ -87,6 +91,16 @@ export function logAxis(theme: Theme, text: AxisText): Axis {
 /** An axis that only places things and is not drawn. */
 export function hiddenAxis(min: number, max: number): Axis {
   return { type: 'linear', display: false, min, max }
+}
+
+/** Names along the side of horizontal bars, first on top. */
+export function nameAxis(theme: Theme): Axis {
+  return {
+    type: 'category',
+    grid: { display: false },
+    border: { color: theme.faint },
+    ticks: { color: theme.ink, font: { family: theme.family, size: theme.textSize }, autoSkip: false },
+  }
 }
 
 /** Empty room between two panels that stand on one another. */

@@ -71,7 +71,7 @@ function legendItem(theme: Theme, dataset: ChartDataset, datasetIndex: number, h
     showLine?: boolean
     fill?: unknown
     borderColor?: string
-    backgroundColor?: string
+    backgroundColor?: string | string[]
     borderDash?: number[]
     borderWidth?: number
     pointStyle?: string
@@ -82,7 +82,8 @@ function legendItem(theme: Theme, dataset: ChartDataset, datasetIndex: number, h
     datasetIndex,
     hidden,
     fontColor: theme.ink,
-    fillStyle: look.backgroundColor,
+    // Points may differ among themselves (hollow behind the sphere): the legend shows the solid one.
+    fillStyle: Array.isArray(look.backgroundColor) ? look.borderColor : look.backgroundColor,
     strokeStyle: look.borderColor,
     lineWidth: filled ? 1 : (look.borderWidth ?? 1),
     lineDash: look.showLine ? (look.borderDash ?? []) : [],

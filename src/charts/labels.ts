@@ -1,4 +1,4 @@
-import { type Pen, type Pixel, strokeLine } from './pen.js'
+import { type Pen, type Pixel, strokeSegment } from './pen.js'
 import { fontOf, type Theme } from './theme.js'
 
 /** Pixels; left < right, top < bottom. */
@@ -80,6 +80,22 @@ export class LabelPlacer {
     return true
   }
 
+  /** True if the text fitted just above or below a horizontal line, as far right as it is free. */
+  alongLine(text: string, y: number, color: string): boolean {
+    this.setFont()
+    const width = this.pen.measureText(text).width
+    const lift = this.theme.smallSize * 0.62 + 2
+    for (let left = this.bounds.right - width - 6; left > this.bounds.left; left -= 12) {
+      for (const middle of [y - lift, y + lift]) {
+        const box = this.boxAt(left, middle, width)
+        if (!this.isFree(box)) continue
+        this.write(text, box, color)
+        return true
+      }
+    }
+    return false
+  }
+
   private setFont(): void {
     this.pen.font = fontOf(this.theme, this.theme.smallSize)
   }
@@ -99,14 +115,7 @@ export class LabelPlacer {
   private lead(x: number, y: number, box: Box): void {
     const toX = Math.min(box.right, Math.max(box.left, x))
     const toY = Math.min(box.bottom, Math.max(box.top, y))
-    strokeLine(
-      this.pen,
-      [
-        [x, y],
-        [toX, toY],
-      ],
-      { color: this.theme.faint },
-    )
+    strokeSegment(this.pen, [x, y], [toX, toY], { color: this.theme.faint })
   }
 
   private write(text: string, box: Box, color: string): void {
@@ -114,7 +123,7 @@ export class LabelPlacer {
     this.pen.textBaseline = 'middle'
     this.pen.fillStyle = color
     this.pen.fillText(text, box.left, (box.top + box.bottom) / 2)
-    this.taken.push({ left: box.left - 3, right: box.right + 3, top: box.top, bottom: box.bottom })
+    this.taken.push({ left: box.left - 6, right: box.right + 6, top: box.top, bottom: box.bottom })
   }
 }
 

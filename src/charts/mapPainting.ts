@@ -1,15 +1,13 @@
+import type { BandedMap } from './bandedMap.js'
 import type { ColorScale } from './colorScale.js'
-import type { Band } from './contourBands.js'
 import type { LabelPlacer } from './labels.js'
 import type { Plane } from './painter.js'
 import { type Pen, type Pixel, strokeLine, trace } from './pen.js'
 import { stepText } from './quantity.js'
 import { fontOf, type Theme } from './theme.js'
 
-/** A map on its sheet: bands in the unit square, where that square lies, and how its values are colored. */
-export interface MapDrawing {
-  readonly bands: readonly Band[]
-  readonly scale: ColorScale
+/** A map on its sheet: its bands, and where their unit square lies. */
+export interface MapDrawing extends BandedMap {
   readonly toPixel: (u: number, v: number) => Pixel
   /** Whether a pixel belongs to the map: labels are set inside only. */
   readonly inside: (pixel: Pixel) => boolean

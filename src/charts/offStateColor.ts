@@ -3,8 +3,8 @@ import { linearAxis } from './axis.js'
 import { frameOptions, paperPainter } from './frame.js'
 import { LabelPlacer } from './labels.js'
 import { type Plane, painter, squareArea } from './painter.js'
-import { type Pen, type Pixel, strokeLine } from './pen.js'
-import { numberText } from './quantity.js'
+import { type Pen, type Pixel, strokeLine, strokeSegment } from './pen.js'
+import { givenText, numberText } from './quantity.js'
 import { pointSeries } from './series.js'
 import { fontOf, seriesStyle, type Theme } from './theme.js'
 
@@ -72,28 +72,14 @@ function circlesWithin(reach: number, limitChroma: number | undefined, theme: Th
     (chroma): Circle => ({ chroma, text: `C*ab = ${chroma}`, color: theme.muted, dash: [3, 3], side: 1 }),
   )
   if (limitChroma === undefined) return circles
-  const text = `limit C*ab = ${Number(limitChroma.toPrecision(3))}`
+  const text = `limit C*ab = ${givenText({ unit: '', factor: 1 }, limitChroma)}`
   return [...circles, { chroma: limitChroma, text, color: theme.limit, dash: [], side: -1 }]
 }
 
 function paintPlane(pen: Pen, { area, at }: Plane, circles: readonly Circle[], theme: Theme): void {
   const [x0, y0] = [at('x', 0), at('y', 0)]
-  strokeLine(
-    pen,
-    [
-      [area.left, y0],
-      [area.right, y0],
-    ],
-    { color: theme.grid },
-  )
-  strokeLine(
-    pen,
-    [
-      [x0, area.top],
-      [x0, area.bottom],
-    ],
-    { color: theme.grid },
-  )
+  strokeSegment(pen, [area.left, y0], [area.right, y0], { color: theme.grid })
+  strokeSegment(pen, [x0, area.top], [x0, area.bottom], { color: theme.grid })
   pen.font = fontOf(theme, theme.smallSize)
   pen.textAlign = 'center'
   pen.textBaseline = 'middle'
@@ -110,22 +96,8 @@ function paintPlane(pen: Pen, { area, at }: Plane, circles: readonly Circle[], t
     pen.fillStyle = color
     pen.fillText(text, x0, at('y', side * chroma))
   }
-  strokeLine(
-    pen,
-    [
-      [x0 - 7, y0],
-      [x0 + 7, y0],
-    ],
-    { color: theme.ink, width: 2 },
-  )
-  strokeLine(
-    pen,
-    [
-      [x0, y0 - 7],
-      [x0, y0 + 7],
-    ],
-    { color: theme.ink, width: 2 },
-  )
+  strokeSegment(pen, [x0 - 7, y0], [x0 + 7, y0], { color: theme.ink, width: 2 })
+  strokeSegment(pen, [x0, y0 - 7], [x0, y0 + 7], { color: theme.ink, width: 2 })
 }
 
 /** From marker edge to marker edge, head at `to`. */

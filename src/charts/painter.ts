@@ -17,6 +17,8 @@ export interface Plane {
   }
   /** Pixel of a value on the scale of that id. */
   readonly at: (scaleId: string, value: number) => number
+  /** Centers of the ends of a data set's bars, or of its points. */
+  readonly ends: (datasetIndex: number) => readonly { readonly x: number; readonly y: number }[]
 }
 
 /** Stages: the sheet before anything, under the data (over the grid), over the data. */
@@ -34,6 +36,7 @@ export function painter(id: string, stage: Stage, paint: (pen: Pen, plane: Plane
         height: chart.height,
         area: chart.chartArea,
         at: (scaleId, value) => chart.scales[scaleId].getPixelForValue(value),
+        ends: (datasetIndex) => chart.getDatasetMeta(datasetIndex).data,
       })
       pen.restore()
     },

@@ -43,12 +43,21 @@ export function trace(pen: Pen, points: readonly Pixel[]): void {
   })
 }
 
+export interface Stroke {
+  readonly color: string
+  /** Default 1. */
+  readonly width?: number
+  /** Default solid. */
+  readonly dash?: readonly number[]
+}
+
+/** Strokes one straight line. */
+export function strokeSegment(pen: Pen, from: Pixel, to: Pixel, style: Stroke): void {
+  strokeLine(pen, [from, to], style)
+}
+
 /** Strokes one polyline. */
-export function strokeLine(
-  pen: Pen,
-  points: readonly Pixel[],
-  style: { readonly color: string; readonly width?: number; readonly dash?: readonly number[] },
-): void {
+export function strokeLine(pen: Pen, points: readonly Pixel[], style: Stroke): void {
   pen.save()
   pen.strokeStyle = style.color
   pen.lineWidth = style.width ?? 1

@@ -1,3 +1,5 @@
+import { cubicBetween } from './cubicBetween.js'
+
 /** Values on a polar grid: `values[iTheta][iPhi]`. */
 export interface PolarField {
   /** Evenly spaced, ascending from 0. */
@@ -7,11 +9,6 @@ export interface PolarField {
   readonly values: readonly (readonly number[])[]
 }
 
-/** Cubic through four samples (Catmull–Rom), at `t` in [0, 1] between the second and the third. */
-function between([a, b, c, d]: readonly [number, number, number, number], t: number): number {
-  return b + 0.5 * t * (c - a + t * (2 * a - 5 * b + 4 * c - d + t * (3 * (b - c) + d - a)))
-}
-
 /** Cubic in φ, which is periodic. */
 function alongRow(row: readonly number[], phi: number): number {
   const n = row.length
@@ -19,7 +16,7 @@ function alongRow(row: readonly number[], phi: number): number {
   const position = (turns - Math.floor(turns)) * n
   const i = Math.floor(position) % n
   const sample = (offset: number): number => row[(i + offset + n) % n]
-  return between([sample(-1), sample(0), sample(1), sample(2)], position - Math.floor(position))
+  return cubicBetween([sample(-1), sample(0), sample(1), sample(2)], position - Math.floor(position))
 }
 
 /** Cubic in θ and φ through the samples; across the center the way goes on at φ + π, beyond the largest θ it stays. */
@@ -30,7 +27,7 @@ export function valueInPolarField({ thetaRad, values }: PolarField, theta: numbe
   const i = Math.min(last - 1, Math.floor(position))
   const sample = (row: number): number =>
     row < 0 ? alongRow(values[-row], phi + Math.PI) : alongRow(values[Math.min(row, last)], phi)
-  return between([sample(i - 1), sample(i), sample(i + 1), sample(i + 2)], position - i)
+  return cubicBetween([sample(i - 1), sample(i), sample(i + 1), sample(i + 2)], position - i)
 }
 
 /** Where the field is largest. */

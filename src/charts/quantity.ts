@@ -52,11 +52,19 @@ export function stepText(shown: number, step: number): string {
   return shown < 0 && Number(text.replace(/\u2009/g, '')) !== 0 ? `−${text}` : text
 }
 
+function withUnit(number: string, unit: string): string {
+  if (unit === '') return number
+  return unit === '°' ? `${number}°` : `${number} ${unit}`
+}
+
 /** Value in its unit, e.g. `4.31 %` from 0.0431; degrees stand close to the number. */
 export function quantityText(quantity: Pick<Quantity, 'unit' | 'factor'>, value: number, digits = 3): string {
-  const number = numberText(quantity.factor * value, digits)
-  if (quantity.unit === '') return number
-  return quantity.unit === '°' ? `${number}°` : `${number} ${quantity.unit}`
+  return withUnit(numberText(quantity.factor * value, digits), quantity.unit)
+}
+
+/** A number somebody gave, e.g. a limit: as short as it was written. */
+export function givenText(quantity: Pick<Quantity, 'unit' | 'factor'>, value: number): string {
+  return withUnit(String(Number((quantity.factor * value).toPrecision(6))).replace('-', '−'), quantity.unit)
 }
 
 /** `θ 45°, φ 90°`. */

@@ -3,7 +3,7 @@ import { linearAxis, logAxis } from './axis.js'
 import { frameOptions, paperPainter } from './frame.js'
 import { spreadApart } from './labels.js'
 import { type Plane, painter } from './painter.js'
-import { type Pen, strokeLine } from './pen.js'
+import { type Pen, strokeSegment } from './pen.js'
 import { axisTitle, type Quantity, quantityText } from './quantity.js'
 import { lineSeries } from './series.js'
 import { fontOf, seriesStyle, type Theme } from './theme.js'
@@ -94,22 +94,8 @@ function paintFamilies(pen: Pen, { area, at }: Plane, data: SearchProgressData, 
   pen.textBaseline = 'middle'
   ticks.forEach((tick, i) => {
     const textY = spread[i] - lift
-    strokeLine(
-      pen,
-      [
-        [area.right - 8, tick.y],
-        [area.right + 6, tick.y],
-      ],
-      { color: theme.series[0].color, width: 2 },
-    )
-    strokeLine(
-      pen,
-      [
-        [area.right + 6, tick.y],
-        [area.right + 18, textY],
-      ],
-      { color: theme.faint },
-    )
+    strokeSegment(pen, [area.right - 8, tick.y], [area.right + 6, tick.y], { color: theme.series[0].color, width: 2 })
+    strokeSegment(pen, [area.right + 6, tick.y], [area.right + 18, textY], { color: theme.faint })
     pen.fillStyle = theme.ink
     pen.fillText(`${tick.label}: ${quantityText(data.objective, tick.objective, 4)}`, area.right + 21, textY)
   })

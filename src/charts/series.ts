@@ -92,3 +92,19 @@ export function areaSeries(theme: Theme, label: string, x: Numbers, y: Numbers, 
     order: 10,
   }
 }
+
+/** Points without a marker, so that the page has something under the pointer where a chart is painted. */
+export function hoverPoints(theme: Theme, points: readonly { readonly x: number; readonly y: number }[]): Series {
+  return {
+    type: 'scatter',
+    label: '',
+    data: points.map(({ x, y }) => ({ x, y })),
+    yAxisID: 'y',
+    borderColor: theme.paper,
+    backgroundColor: theme.ink,
+    borderWidth: 1,
+    pointRadius: 0,
+    pointHitRadius: 8,
+    pointHoverRadius: 4,
+  }
+}

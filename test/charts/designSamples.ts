@@ -3,14 +3,9 @@ import { METRIC_QUANTITIES } from '../../src/charts/quantity.js'
 import type { ReflectanceSpectrumData } from '../../src/charts/reflectanceSpectrum.js'
 import type { SearchProgressData } from '../../src/charts/searchProgress.js'
 import type { ViewingConeData } from '../../src/charts/viewingCone.js'
+import { DEGREE, steps } from './steps.js'
 
 /** Invented data, shaped like the studies' answers; no display was measured or computed. */
-
-const DEGREE = Math.PI / 180
-
-function steps(from: number, to: number, step: number): number[] {
-  return Array.from({ length: Math.round((to - from) / step) + 1 }, (_, i) => from + i * step)
-}
 
 const wavelengthNm = steps(380, 780, 5)
 const bell = (nm: number, center: number, width: number): number => Math.exp(-(((nm - center) / width) ** 2))

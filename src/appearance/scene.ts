@@ -29,6 +29,12 @@ export interface Look extends Direction {
   readonly luminousEmissionTransmittance?: number
 }
 
+interface Eye {
+  readonly solver: Solver
+  /** Emission transmittance over wavelength. */
+  readonly emission: Float64Array
+}
+
 /** Directions whose solvers are kept. */
 const SOLVERS_KEPT = 256
 
@@ -37,7 +43,7 @@ export class Scene {
   readonly weights: ColorWeights
   private readonly emissionWeights: Float64Array
   private readonly opticalStack: OpticalStack
-  private readonly solvers = new Map<string, { solver: Solver; emission: Float64Array }>()
+  private readonly solvers = new Map<string, Eye>()
   private readonly colorWeights: readonly [number, number, number]
 
   /** The conditions and the emission's spectrum of `stack` are those of all later looks. */
@@ -51,8 +57,17 @@ export class Scene {
     this.opticalStack = new OpticalStack(wavelengthsNm)
   }
 
+  /** Looks from a direction that will be asked for again, with the stack changed: it keeps a solver of its own. */
   look(stack: Stack, theta: number, phi: number): Look {
-    const { solver, emission } = this.solverAt(theta, phi)
+    return this.see(this.solverAt(`${theta},${phi}`), stack, theta, phi)
+  }
+
+  /** Looks from one of many directions: a single solver moves on, keeping what the next azimuth shares with the last. */
+  lookOnce(stack: Stack, theta: number, phi: number): Look {
+    return this.see(this.solverAt('moving'), stack, theta, phi)
+  }
+
+  private see({ solver, emission }: Eye, stack: Stack, theta: number, phi: number): Look {
     const stokes = emissionStokesAt(stack.emission, phi)
     solver.solve(this.opticalStack.layersOf(stack), this.opticalStack.panelOf(stack), theta, phi, stokes)
     const { reflectance, frontReflectance } = solver
@@ -106,8 +121,7 @@ export class Scene {
     return onAxis === undefined ? 1 : look.luminousEmissionTransmittance / onAxis
   }
 
-  private solverAt(theta: number, phi: number): { solver: Solver; emission: Float64Array } {
-    const key = `${theta},${phi}`
+  private solverAt(key: string): Eye {
     let found = this.solvers.get(key)
     if (found === undefined) {
       if (this.solvers.size >= SOLVERS_KEPT) this.solvers.clear()

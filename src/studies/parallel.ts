@@ -1,0 +1,36 @@
+import type { Hooks } from './hooks.js'
+
+/**
+ * A piece of a study that can run anywhere: `prepare` takes what all jobs share (plain data, sent once to each worker)
+ * and returns the function of a job (plain data in, plain data out). A job starts from a fresh state, so that its digits
+ * do not depend on which worker ran what before.
+ */
+export interface Task<Shared, Job, Result> {
+  /** Key in `tasks.ts`, by which a worker finds it. */
+  readonly name: string
+  readonly prepare: (shared: Shared) => Promise<(job: Job) => Result>
+}
+
+/**
+ * Results in the order of the jobs, whatever the number of workers. `hooks.progress` counts jobs; where `hooks.stopped`
+ * turns true no further job is started, and the results of those not run are undefined.
+ */
+export type ParallelMap = <Shared, Job, Result>(
+  task: Task<Shared, Job, Result>,
+  shared: Shared,
+  jobs: readonly Job[],
+  hooks?: Hooks,
+) => Promise<(Result | undefined)[]>
+
+/** The same in the thread at hand, giving way between jobs so that a stop can be noticed. */
+export const mapInline: ParallelMap = async (task, shared, jobs, hooks = {}) => {
+  const run = await task.prepare(shared)
+  const results = new Array(jobs.length)
+  for (let k = 0; k < jobs.length; k++) {
+    if (hooks.stopped?.()) break
+    results[k] = run(jobs[k])
+    hooks.progress?.((k + 1) / jobs.length)
+    await Promise.resolve()
+  }
+  return results
+}

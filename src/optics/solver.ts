@@ -19,7 +19,7 @@ import { fillTiltedModes } from './tiltedModes.js'
 const UNPOLARIZED: EmissionStokes = [1, 0, 0, 0]
 
 /** A medium's matrices and what they were computed from. */
-interface Slot {
+export interface Slot {
   medium: Medium | undefined
   thicknessNm: number
   relativeAzimuthRad: number
@@ -48,7 +48,8 @@ export class Solver {
   private readonly air: Medium
   private readonly joiner: Joiner
   private readonly face: Packet
-  private slots: Slot[] = []
+  /** Air, the layers, the medium at the end: read by `firstPass`. */
+  slots: readonly Slot[] = []
   /** Packets from the panel up, and what lies below each: read by `Sensitivity`. */
   segments: readonly Segment[] = []
   levels: readonly Below[] = []
@@ -223,8 +224,7 @@ export class Solver {
     this.structure = structure
     const n = this.wavelengthsNm.length
     const end = layers.length + 1
-    while (this.slots.length > end + 1) this.slots.pop()
-    while (this.slots.length < end + 1) this.slots.push(createSlot(n))
+    this.slots = Array.from({ length: end + 1 }, () => createSlot(n))
     const segments: Segment[] = []
     let last = end
     for (let k = end - 1; k >= 0; k--) {
@@ -238,7 +238,6 @@ export class Solver {
     this.above.from = -1
     this.highestBefore = -1
     this.trial = []
-    for (const slot of this.slots) slot.medium = undefined
     this.panel = undefined
   }
 

@@ -29,7 +29,10 @@ export interface Cone {
   /** CIEDE2000 from the head-on color. */
   readonly delta_e00: readonly (readonly number[])[]
   readonly emission_transmittance?: readonly (readonly number[])[]
-  readonly ambient_contrast?: readonly { readonly illuminance_lx: number; readonly ratio: readonly (readonly number[])[] }[]
+  readonly ambient_contrast?: readonly {
+    readonly illuminance_lx: number
+    readonly ratio: readonly (readonly number[])[]
+  }[]
   readonly summary: ConeSummary
   readonly interrupted: boolean
 }

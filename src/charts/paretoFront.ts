@@ -58,7 +58,7 @@ export function paretoFront(data: ParetoFrontData, theme: Theme): ChartConfigura
           return `${label}: ${quantityText(data.x.quantity, x)}, ${quantityText(data.y.quantity, y)}`
         },
       }),
-      scales: { x: marketAxis(data, 'x', theme), y: marketAxis(data, 'y', theme) },
+      scales: { x: candidateAxis(data, 'x', theme), y: candidateAxis(data, 'y', theme) },
     },
     plugins: [
       paperPainter(theme),
@@ -84,7 +84,7 @@ function groupsOf(candidates: readonly Candidate[]) {
     .filter(({ members }) => members.length > 0)
 }
 
-function marketAxis({ candidates, ...axes }: ParetoFrontData, key: 'x' | 'y', theme: Theme): Axis {
+function candidateAxis({ candidates, ...axes }: ParetoFrontData, key: 'x' | 'y', theme: Theme): Axis {
   const { quantity, better } = axes[key]
   const { min, max } = rangeOf(candidates.map((candidate) => quantity.factor * candidate[key]))
   const margin = 0.06 * (max - min || 1)

@@ -21,7 +21,7 @@ export function firstPass(solver: Solver): FirstPass {
   const { slots } = solver
   const face = createPacket(n)
   const c2 = solver.cosTheta ** 2
-  let light = new Float64Array(4 * n)
+  let light: Float64Array = new Float64Array(4 * n)
   light.fill(c2 / 2, 0, n)
   light.fill(1 / 2, n, 2 * n)
   const down: Float64Array[] = []

@@ -158,12 +158,12 @@ function summarize(
   half: boolean,
 ): ConeSummary {
   let worst = { theta_deg: 0, phi_deg: 0, luminous_reflectance: Number.NEGATIVE_INFINITY }
-  luminous.forEach((row, t) =>
+  luminous.forEach((row, t) => {
     row.forEach((value, p) => {
       if (value <= worst.luminous_reflectance) return
       worst = { theta_deg: degrees(thetas[t]), phi_deg: degrees(phis[p]), luminous_reflectance: value }
-    }),
-  )
+    })
+  })
   const limit =
     question.limit ?? stack.limits.find((l) => l.metric === 'luminous_reflectance' && l.max !== undefined)?.max
   return {

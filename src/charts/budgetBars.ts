@@ -22,9 +22,10 @@ export function budgetBars(data: BudgetBarsData, theme: Theme): ChartConfigurati
   const shown = (key: 'alone' | 'ifRemoved'): number[] => terms.map((term) => metric.factor * term[key])
   const [alone, ifRemoved] = [shown('alone'), shown('ifRemoved')]
   const [low, high] = [Math.min(0, ...alone, ...ifRemoved), Math.max(0, ...alone, ...ifRemoved)]
+  const span = high - low || 1
   // All figures to the same decimals: a hundredth of the largest bar's decade.
-  const step = 10 ** (Math.floor(Math.log10(high - low || 1)) - 2)
-  const margin = 0.12 * (high - low)
+  const step = 10 ** (Math.floor(Math.log10(span)) - 2)
+  const margin = 0.12 * span
   return {
     type: 'bar',
     data: {

@@ -21,7 +21,10 @@ export interface EllipseRowData {
 
 const ROWS = { goingIn: 0.72, comingBack: 0.26 } as const
 
-/** The light's ellipse behind each layer on its way in, and in front of each on its way back. */
+/**
+ * The light's ellipse behind each layer on its way in, and in front of each on its way back. Give the sheet at least 80 px
+ * a layer.
+ */
 export function ellipseRow(data: EllipseRowData, theme: Theme): ChartConfiguration {
   const { layers } = data
   return {

@@ -1,6 +1,11 @@
 import type { ChartDataset, ChartOptions, ChartTypeRegistry, Plugin, TooltipItem } from 'chart.js'
 import { painter } from './painter.js'
 import type { Theme } from './theme.js'
+import { wrapText } from './wrapText.js'
+
+/** What fits on the narrowest sheet in use, 720 px. */
+const TITLE_LETTERS = 62
+const NOTE_LETTERS = 90
 
 export interface FrameText {
   readonly title: string
@@ -23,7 +28,7 @@ export function frameOptions(theme: Theme, text: FrameText, rightMargin = 0): Ch
     plugins: {
       title: {
         display: true,
-        text: text.title,
+        text: wrapText(text.title, TITLE_LETTERS),
         align: 'start',
         color: theme.ink,
         font: { family, size: theme.titleSize, weight: 'bold' },
@@ -31,7 +36,7 @@ export function frameOptions(theme: Theme, text: FrameText, rightMargin = 0): Ch
       },
       subtitle: {
         display: (text.notes ?? []).length > 0,
-        text: [...(text.notes ?? [])],
+        text: (text.notes ?? []).flatMap((note) => wrapText(note, NOTE_LETTERS)),
         align: 'start',
         color: theme.muted,
         font: { family, size: smallSize, lineHeight: 1.35 },

@@ -1,6 +1,7 @@
 import { type Axis, linearAxis, panelGap } from './axis.js'
 import { axisTitle, type Quantity } from './quantity.js'
 import type { Theme } from './theme.js'
+import { wrapText } from './wrapText.js'
 
 export interface Panel {
   /** Scale id its series name. */
@@ -26,17 +27,7 @@ export function panelAxes(theme: Theme, panels: readonly Panel[]): Record<string
   ;[...panels].reverse().forEach((panel, i) => {
     const { id, quantity, weight = 1, ...range } = panel
     if (i > 0) axes[`gap${i}`] = panelGap(GAP_SHARE * wholeWeight)
-    axes[id] = linearAxis(theme, { title: wrap(axisTitle(quantity), letters), panelWeight: weight, ...range })
+    axes[id] = linearAxis(theme, { title: wrapText(axisTitle(quantity), letters), panelWeight: weight, ...range })
   })
   return axes
-}
-
-function wrap(text: string, letters: number): string[] {
-  const lines = ['']
-  for (const word of text.split(' ')) {
-    const last = lines[lines.length - 1]
-    if (last !== '' && last.length + word.length + 1 > letters) lines.push(word)
-    else lines[lines.length - 1] = last === '' ? word : `${last} ${word}`
-  }
-  return lines
 }

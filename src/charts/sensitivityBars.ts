@@ -51,7 +51,7 @@ export function sensitivityBars(data: SensitivityBarsData, theme: Theme): ChartC
         x: linearAxis(theme, {
           title: 'share of the variance (%), whiskers: 95 % interval',
           min: lowest,
-          max: 1.04 * highest,
+          max: 1.04 * highest || 100,
         }),
         y: nameAxis(theme),
       },

@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest'
 import { DARK, PAPER, type Theme } from '../../src/charts/theme.js'
 import { drawChart } from '../../src/cli/drawChart.js'
 import { type Exhibit, GALLERY } from './gallery.js'
-import { type WrittenText, writtenTexts } from './writtenTexts.js'
+import { overlapping, writtenTexts } from './writtenTexts.js'
 
 const SCALE = 2
 const folder = new URL('../../out/charts-gallery/', import.meta.url)
@@ -25,15 +25,6 @@ function inkedShare(pixels: Uint8ClampedArray, paper: string): number {
     if ((pixels[i] << 16) + (pixels[i + 1] << 8) + pixels[i + 2] !== bare) inked++
   }
   return (4 * inked) / pixels.length
-}
-
-function overlapping(texts: readonly WrittenText[]): string[] {
-  return texts.flatMap((a, i) =>
-    texts
-      .slice(i + 1)
-      .filter((b) => a.left < b.right && b.left < a.right && a.top < b.bottom && b.top < a.bottom)
-      .map((b) => `“${a.text}” on “${b.text}”`),
-  )
 }
 
 describe.each(GALLERY)('$name', ({ name, build, width, height }: Exhibit) => {
@@ -75,7 +66,7 @@ describe.each(GALLERY)('$name', ({ name, build, width, height }: Exhibit) => {
     }, SCALE)
     if (bytes && shade === 'dark') writeFileSync(new URL(`${name}-dark.png`, folder), bytes)
     const words = texts.map(({ text }) => text)
-    expect(words).toContain(config.options?.plugins?.title?.text)
+    for (const line of config.options?.plugins?.title?.text ?? ['no title']) expect(words).toContain(line)
     for (const { label } of config.data.datasets) if (label) expect(words).toContain(label)
     expect(overlapping(texts)).toEqual([])
     for (const written of texts) {

@@ -45,7 +45,8 @@ function principalAxes(azimuthRad: number, tiltRad: number): readonly (readonly 
 
 /**
  * Δ, 4×4. From curl E = i k0 H and curl H = −i k0 ε E:
- * Ex'' = i k0 (Hy' + ξ Ez), Ey'' = i k0 (−Hx'), Hy'' = i k0 Dx, (−Hx')' = i k0 (Dy − ξ² Ey), with ε_zz Ez = −ξ Hy' − ε_zx Ex − ε_zy Ey.
+ * ∂Ex = i k0 (Hy + ξ Ez), ∂Ey = i k0 (−Hx), ∂Hy = i k0 Dx, ∂(−Hx) = i k0 (Dy − ξ² Ey), with ∂ along z', all in the solver
+ * frame, and ε_zz Ez = −ξ Hy − ε_zx Ex − ε_zy Ey.
  */
 export function berremanMatrix(epsilon: Matrix, xi: number): Matrix {
   const [[exx, exy, exz], [eyx, eyy, eyz], [ezx, ezy, ezz]] = epsilon

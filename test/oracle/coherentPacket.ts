@@ -27,7 +27,7 @@ export interface Packet {
   readonly reflectBelow: Matrix
 }
 
-export const atItsFace = (modes: LayerModes): Medium => ({ modes, down: identity(2), up: identity(2) })
+const atItsFace = (modes: LayerModes): Medium => ({ modes, down: identity(2), up: identity(2) })
 
 /**
  * Unknowns, two components each: u₀, d₁, u₁, … d_N, u_N, d_{N+1}, where d_j is E of the forward pair at the upper

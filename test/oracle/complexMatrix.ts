@@ -3,8 +3,6 @@ import { abs, add, type Complex, conj, div, mul, ONE, sub, sum, ZERO } from './c
 /** Rows of columns. */
 export type Matrix = readonly (readonly Complex[])[]
 
-export const columnsOf = (a: Matrix): number => a[0].length
-
 export const identity = (size: number): Matrix =>
   Array.from({ length: size }, (_, i) => Array.from({ length: size }, (_, j) => (i === j ? ONE : ZERO)))
 

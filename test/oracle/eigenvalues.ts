@@ -31,24 +31,32 @@ export function characteristicPolynomial(a: Matrix): readonly Complex[] {
 const valueAt = (coefficients: readonly Complex[], q: Complex): Complex =>
   coefficients.reduceRight((value, c) => add(mul(value, q), c), ONE)
 
-/** All roots of the monic polynomial, in no order. */
+/** What rounding may leave of the value at a root. */
+const roundingAt = (coefficients: readonly Complex[], q: Complex): number =>
+  8 * Number.EPSILON * coefficients.reduceRight((value, c) => value * abs(q) + abs(c), 1)
+
+/** Simple roots are there after a dozen rounds; those of a double one halve their distance in each. */
+const MOST_ROUNDS = 200
+
+/**
+ * All roots of the monic polynomial, in no order. A root rests once the polynomial vanishes there to rounding: two
+ * approximations of one double root would otherwise throw each other about.
+ */
 export function polynomialRoots(coefficients: readonly Complex[]): readonly Complex[] {
-  const radius = 1 + Math.max(...coefficients.map(abs))
   const start: Complex = { re: 0.4, im: 0.9 }
-  let roots: Complex[] = []
-  for (let k = 0, power = scale(Math.min(radius, 2), ONE); k < coefficients.length; k++) {
-    roots.push(power)
-    power = mul(power, start)
-  }
-  for (let iteration = 0; iteration < 500; iteration++) {
-    const steps = roots.map((root, i) => {
+  let roots: Complex[] = [ONE]
+  while (roots.length < coefficients.length) roots.push(mul(roots[roots.length - 1], start))
+  for (let round = 0; round < MOST_ROUNDS; round++) {
+    const values = roots.map((root) => valueAt(coefficients, root))
+    const rests = roots.map((root, i) => abs(values[i]) <= roundingAt(coefficients, root))
+    if (rests.every(Boolean)) return roots
+    roots = roots.map((root, i) => {
+      if (rests[i]) return root
       const others = roots.filter((_, j) => j !== i).map((other) => sub(root, other))
-      return div(valueAt(coefficients, root), others.reduce(mul, ONE))
+      return sub(root, div(values[i], others.reduce(mul, ONE)))
     })
-    roots = roots.map((root, i) => sub(root, steps[i]))
-    if (Math.max(...steps.map(abs)) < 1e-15 * radius) break
   }
-  return roots
+  throw new Error('the roots of the characteristic polynomial were not found')
 }
 
 export const quadraticWithRoots = (a: Complex, b: Complex): Quadratic => ({ sum: add(a, b), product: mul(a, b) })

@@ -19,7 +19,7 @@ import {
 } from './complexMatrix.js'
 
 /** 4×4, from the coherency vectors that enter to the one that leaves upward on top. */
-export interface Balance {
+interface Balance {
   /** Of light from above the stack. */
   readonly fromAbove: Matrix
   /** Of light that starts upward just above the panel. */

@@ -1,7 +1,8 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { Complex } from './complex.js'
-import { panelInAir, sheetPolarizer, sheetRetarder } from './idealSheets.js'
+import { oracleSpectrum } from './oracleSpectrum.js'
+import { polarizerSheet, retarderSheet, sheetStack } from './sheetStack.js'
 import { type OracleLayer, type OraclePoint, solvePoint } from './solvePoint.js'
 import type { Mueller } from './stokes.js'
 
@@ -115,23 +116,18 @@ describe('the oracle', () => {
     // Linear along x, going to the viewer, slow axis at +45°: exp(−iωt + iqz) puts the slow component a quarter period
     // behind, so the field stands along −45° first and along +45° a quarter period later. It turns counter-clockwise
     // as the viewer sees it, with the fingers of a right hand whose thumb points along the propagation.
-    const polarizer = sheetPolarizer(Math.PI / 2, 550)
-    const handOf = (slowAxisRad: number) =>
-      solvePoint({
-        wavelengthNm: 550,
-        thetaRad: 0,
-        phiRad: 0.3,
-        layers: [sheetRetarder(slowAxisRad, 550 / 4), polarizer],
-        panel: panelInAir(0),
-      }).emissionStokes?.[3]
-    expect(handOf(Math.PI / 4)).toBeCloseTo(0.5, 7)
-    expect(handOf(-Math.PI / 4)).toBeCloseTo(-0.5, 7)
+    const handOf = (axisDeg: number) => {
+      const films = [retarderSheet({ axisDeg, retardanceNm: 550 / 4 }, 'quarter'), polarizerSheet(0, 'polarizer')]
+      return oracleSpectrum(sheetStack(films, 0), [550], 0, 0.3)[0].emissionStokes?.[3]
+    }
+    expect(handOf(45)).toBeCloseTo(0.5, 7)
+    expect(handOf(-45)).toBeCloseTo(-0.5, 7)
   })
 
   it('turns the hand over at a mirror, and only that', () => {
-    const bare = { wavelengthNm: 550, thetaRad: 0.6, phiRad: 0.3, layers: [], panel: panelInAir(1) }
+    const [{ mueller }] = oracleSpectrum(sheetStack([], 1), [550], 0.6, 0.3)
     const expected = [1, 1, 1, -1]
-    for (const [i, row] of solvePoint(bare).mueller.entries())
+    for (const [i, row] of mueller.entries())
       for (const [j, v] of row.entries()) expect(v).toBeCloseTo(i === j ? expected[i] : 0, 13)
   })
 })

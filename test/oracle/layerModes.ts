@@ -109,7 +109,7 @@ export const passUp = (modes: LayerModes, k0TimesThickness: number): Matrix =>
  * exp of a 2×2 matrix with eigenvalues m ± h: (e⁺ + e⁻)/2 · I + (e⁺ − e⁻)/(2h) · (M − m I), e± = exp(m ± h).
  * Nothing overflows where the waves decay.
  */
-export function exponential(matrix: Matrix): Matrix {
+function exponential(matrix: Matrix): Matrix {
   const [[a, b], [c, d]] = matrix
   const m = scale(0.5, add(a, d))
   const halfDifference = scale(0.5, sub(a, d))

@@ -1,6 +1,6 @@
 /** The plain form of a stack file that the oracle reads: what `test/check-values/` uses, checked by nobody. */
 
-/** A bare number (nm, radians of nothing: degrees, fraction) or a number with its unit. */
+/** A number with its unit, or bare: nm, degrees or a fraction. */
 export type Quantity = number | string
 /** Linear between the wavelengths, constant outside. */
 export type PlainSpectrum = Quantity | { readonly wavelength_nm: readonly number[]; readonly value: readonly number[] }
@@ -14,7 +14,7 @@ interface PlainLayerBase {
   readonly thickness: Quantity
   readonly coherent?: boolean
 }
-export interface PlainIsotropic extends PlainLayerBase {
+interface PlainIsotropic extends PlainLayerBase {
   readonly kind: 'isotropic'
   readonly index: PlainIndex
 }
@@ -38,7 +38,7 @@ export interface PlainPolarizer extends PlainLayerBase {
   readonly transmission_axis_transmittance?: PlainSpectrum
   readonly absorption_axis_transmittance?: PlainSpectrum
 }
-export interface PlainCrystal extends PlainLayerBase {
+interface PlainCrystal extends PlainLayerBase {
   readonly kind: 'crystal'
   readonly indices: readonly [PlainIndex, PlainIndex, PlainIndex]
   readonly azimuth?: Quantity

@@ -15,7 +15,7 @@
 import { type Complex, I, mul, neg, ONE, real, scale, ZERO } from './complex.js'
 import { inverse, type Matrix, product } from './complexMatrix.js'
 
-export type Direction = 'in' | 'out'
+type Direction = 'in' | 'out'
 export type Stokes = readonly [number, number, number, number]
 export type Mueller = readonly [Stokes, Stokes, Stokes, Stokes]
 

@@ -5,8 +5,7 @@ const UNPOLARIZED: EmissionStokes = [1, 0, 0, 0]
 
 /**
  * State of the light that leaves the panel in azimuth `phi`, in the (p, s) frame of the solver. A given ellipse keeps its
- * axis as the viewer sees it head-on; positive ellipticity is right-handed as named from the source. The solver's S3 is
- * written for its z into the panel, and this light runs the other way: hence the minus sign.
+ * axis as the viewer sees it head-on; positive ellipticity is right-handed as named from the source.
  */
 export function emissionStokesAt({ polarization }: Emission, phi: number): EmissionStokes {
   if (polarization === 'none') return UNPOLARIZED
@@ -16,6 +15,6 @@ export function emissionStokesAt({ polarization }: Emission, phi: number): Emiss
     1,
     linear * Math.cos(2 * (axis - phi)),
     -linear * Math.sin(2 * (axis - phi)),
-    -degree * Math.sin(2 * ellipticity),
+    degree * Math.sin(2 * ellipticity),
   ]
 }

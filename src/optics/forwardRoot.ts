@@ -17,7 +17,8 @@ export function forwardRoot(re: number, im: number, out: Float64Array): void {
     const modulus = Math.sqrt(re * re + im * im)
     if (re >= 0) {
       rootRe = Math.sqrt((modulus + re) / 2)
-      rootIm = im / (2 * rootRe)
+      // Where the modulus underflows the root is nothing.
+      rootIm = rootRe > 0 ? im / (2 * rootRe) : 0
     } else {
       const size = Math.sqrt((modulus - re) / 2)
       rootIm = im < 0 ? -size : size

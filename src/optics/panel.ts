@@ -9,7 +9,10 @@
 import type { Below } from './adding.js'
 import type { MirrorEnd } from './opticalLayer.js'
 
-/** State of the light a panel emits, in the (p, s) frame: fractions of unit flux; unpolarized is (1, 0, 0, 0). */
+/**
+ * State of the light a panel emits, in the (p, s) frame: fractions of unit flux; unpolarized is (1, 0, 0, 0). S3 > 0 is
+ * right-handed as named from the source.
+ */
 export type EmissionStokes = readonly [number, number, number, number]
 
 /** Fills W and e just above the mirror. */
@@ -30,6 +33,6 @@ export function fillMirror(end: MirrorEnd, xi: number, stokes: EmissionStokes, b
     e[i] = (c2 * (stokes[0] + stokes[1])) / 2
     e[n + i] = (stokes[0] - stokes[1]) / 2
     e[2 * n + i] = (Math.sqrt(c2) * stokes[2]) / 2
-    e[3 * n + i] = (-Math.sqrt(c2) * stokes[3]) / 2
+    e[3 * n + i] = (Math.sqrt(c2) * stokes[3]) / 2
   }
 }

@@ -161,7 +161,8 @@ export class Solver {
 
   /**
    * Stokes vector of what leaves to the eye for unit emitted flux, `4 n` numbers (S0 is the emission transmittance), in the
-   * frame Ep = Ex'/cos θ, Es = Ey' of the solver; S3 = -2 Im Ep Es*. Mirror panels only.
+   * frame Ep = Ex'/cos θ, Es = Ey' of the solver. S3 > 0 is right-handed as named from the source: +2 Im Ep Es* for light
+   * that comes out. Mirror panels only.
    */
   emissionStokes(out: Float64Array): void {
     const n = this.wavelengthsNm.length
@@ -173,13 +174,14 @@ export class Solver {
       out[i] = (p + s) * factor
       out[n + i] = (p - s) * factor
       out[2 * n + i] = (2 * this.emitted[2 * n + i] * factor) / c
-      out[3 * n + i] = (-2 * this.emitted[3 * n + i] * factor) / c
+      out[3 * n + i] = (2 * this.emitted[3 * n + i] * factor) / c
     }
   }
 
   /**
    * Mueller matrix of reflection, `16 n` numbers (row-major components). Both beams are described by Ep = Ex'/cos θ,
-   * Es = Ey' of the solver frame: S = (|Ep|² + |Es|², |Ep|² - |Es|², 2 Re Ep Es*, -2 Im Ep Es*).
+   * Es = Ey' of the solver frame: S = (|Ep|² + |Es|², |Ep|² - |Es|², 2 Re Ep Es*, S3), with S3 > 0 right-handed as named from
+   * the source, so -2 Im Ep Es* going in and +2 Im Ep Es* coming out: an ideal mirror is diag(1, 1, 1, -1).
    */
   mueller(out: Float64Array): void {
     const n = this.wavelengthsNm.length
@@ -203,7 +205,7 @@ export class Solver {
         out[column * n + i] = p + s
         out[(4 + column) * n + i] = p - s
         out[(8 + column) * n + i] *= 2 / c
-        out[(12 + column) * n + i] *= -2 / c
+        out[(12 + column) * n + i] *= 2 / c
       }
     }
   }

@@ -18,7 +18,7 @@ export function kernelPoint(point: OraclePoint): OracleResult {
   const transmittance = new Float64Array(1)
   const [s0, s1, s2, s3] = emissionOf(solver)
   solver.emissionTransmittance(transmittance)
-  return { ...reflection, emissionTransmittance: transmittance[0], emissionStokes: [s0, s1, s2, -s3] }
+  return { ...reflection, emissionTransmittance: transmittance[0], emissionStokes: [s0, s1, s2, s3] }
 }
 
 function medium([a, b, c]: readonly [Complex, Complex, Complex]) {
@@ -36,15 +36,11 @@ function panelEnd(panel: OraclePanel): PanelEnd {
   }
 }
 
-/**
- * The kernel writes S3 = −2 Im(Ep Es*) for both beams, which names the hand by the way in. The oracle names it by the
- * beam's own propagation, so S3 of what comes out changes its sign here.
- */
 function muellerOf(solver: Solver): Mueller {
   const flat = new Float64Array(16)
   solver.mueller(flat)
-  const row = (i: number, sign: number): Stokes => [0, 1, 2, 3].map((j) => sign * flat[4 * i + j]) as unknown as Stokes
-  return [row(0, 1), row(1, 1), row(2, 1), row(3, -1)]
+  const row = (i: number): Stokes => [flat[4 * i], flat[4 * i + 1], flat[4 * i + 2], flat[4 * i + 3]]
+  return [row(0), row(1), row(2), row(3)]
 }
 
 function emissionOf(solver: Solver): Float64Array {

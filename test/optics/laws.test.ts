@@ -140,3 +140,21 @@ describe('laws', () => {
     )
   })
 })
+
+it('stays finite where extinction and tilt are the smallest numbers there are', () => {
+  // Found by a random run: the square of the smallest double is 0.
+  const layer: PlainLayer = {
+    axes: [
+      [1.35, 7.4e-323],
+      [1.35, 0],
+      [1.35, 0],
+    ],
+    azimuthRad: 0,
+    tiltRad: -5e-324,
+    thicknessNm: 5000,
+    coherent: false,
+  }
+  const panel = { kind: 'mirror', index: 1.3, reflectance: 0, depolarized: 0 } as const
+  const { reflectance } = solve({ layers: [layer], panel, thetaRad: 0, phiRad: 0 })
+  for (const value of reflectance) expect(value).toBeGreaterThan(0)
+})

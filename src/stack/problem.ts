@@ -8,7 +8,12 @@ export interface Problem {
   /** File as the user named it, or `--set …` for an option. */
   readonly file: string
   /** 1-based place of the offending text in `file`; absent for options. */
-  readonly range?: { readonly line: number; readonly column: number; readonly endLine: number; readonly endColumn: number }
+  readonly range?: {
+    readonly line: number
+    readonly column: number
+    readonly endLine: number
+    readonly endColumn: number
+  }
   /** What is wrong, one plain sentence without the place. */
   readonly message: string
   readonly received?: string

@@ -1,3 +1,8 @@
+import type { Illuminant, IlluminantName } from '../color/illuminant.js'
+import type { IndexLaw, Spectrum, SpectrumTable } from '../materials/indexLaw.js'
+
+export type { Illuminant, IlluminantName, IndexLaw, Spectrum, SpectrumTable }
+
 /**
  * A checked stack file. Field names are those of the file (so that a parameter path is a path into this object);
  * every length is in nm, every angle in radians, every share a fraction. Plain data: it can be cloned, sent to a
@@ -36,25 +41,6 @@ export interface Direction {
   readonly theta: number
   readonly phi: number
 }
-
-export type IlluminantName = 'D65' | 'D50' | 'A' | 'E' | 'FL2' | 'FL11' | 'LED-B3' | 'LED-B5'
-/** A standard illuminant, daylight of a color temperature (K), or a lamp given as a table (from a file, read already). */
-export type Illuminant = IlluminantName | { readonly cct: number } | SpectrumTable
-
-/** Linear between the wavelengths (nm, ascending), constant outside. */
-export interface SpectrumTable {
-  readonly wavelength_nm: readonly number[]
-  readonly value: readonly number[]
-}
-export type Spectrum = number | SpectrumTable
-
-/** Refractive index n + ik, k >= 0. A formula is compiled by `materials/formula` when the stack is read. */
-export type IndexLaw =
-  | number
-  | { readonly n: Spectrum; readonly k: Spectrum }
-  | { readonly cauchy_nm: readonly [number, number, number] }
-  | { readonly material: string }
-  | { readonly formula: string }
 
 /** Two trade ratios Re(450)/Re(550) and Re(650)/Re(550), or a measured table in any scale (divided by its value at 550 nm). */
 export type Dispersion = { readonly re450: number; readonly re650: number } | SpectrumTable

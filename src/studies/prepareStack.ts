@@ -11,7 +11,6 @@ export async function prepareStack(stack: Stack): Promise<void> {
     stack.panel.index,
   ]
   for (const law of laws) {
-    if (typeof law === 'object' && 'formula' in law)
-      await prepareFormula(law.formula, ['wavelength_nm', 'wavelength_um'])
+    if (typeof law === 'object' && 'formula' in law) await prepareFormula(law.formula)
   }
 }

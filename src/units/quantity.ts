@@ -114,3 +114,9 @@ export function formatQuantity(value: number, kind: QuantityKind, digits?: numbe
   const { unit } = DISPLAY[kind]
   return unit === '' ? number : `${number} ${unit}`
 }
+
+/** The inverse of `toDisplay`. */
+export function fromDisplay(shown: number, kind: QuantityKind): number {
+  if (kind === 'angle') return degreesToRad(shown)
+  return kind === 'share' ? shown / 100 : shown
+}

@@ -1,0 +1,139 @@
+/**
+ * How the metrics move along one or two axes: any parameter of the stack, the direction (`theta`, `phi`), or the center of
+ * a `wavelength` band. Links let other parameters follow (a laminate turned as one).
+ */
+import { metricValue } from '../appearance/metric.js'
+import { Scene } from '../appearance/scene.js'
+import { formulaAt, prepareFormula } from '../materials/formula.js'
+import { compileParameters } from '../stack/parameters.js'
+import type { MetricRequest, Stack } from '../stack/stack.js'
+import { fromDisplay, type QuantityKind, toDisplay } from '../units/quantity.js'
+import type { Hooks } from './hooks.js'
+import { metricKey } from './metricKey.js'
+import { mapInline, type ParallelMap, type Task } from './parallel.js'
+import { prepareStack } from './prepareStack.js'
+
+export interface SweepAxis {
+  /** A parameter path, `theta`, `phi` or `wavelength`. */
+  readonly path: string
+  readonly kind: QuantityKind
+  /** nm, rad, fractions. */
+  readonly values: readonly number[]
+}
+
+/** A parameter that follows the axes: an expression in their paths, in display units (nm, degrees, percent). */
+export interface SweepLink {
+  readonly path: string
+  readonly kind: QuantityKind
+  readonly expression: string
+}
+
+export interface SweepQuestion {
+  /** One or two; the first runs slowest. */
+  readonly axes: readonly SweepAxis[]
+  readonly links: readonly SweepLink[]
+  readonly requests: readonly MetricRequest[]
+  /** Width of the band around a `wavelength`, nm. */
+  readonly bandNm: number
+}
+
+export interface Sweep {
+  readonly title: string
+  /** Values in display units: nm, degrees, percent for shares. */
+  readonly axes: readonly { readonly path: string; readonly unit: QuantityKind; readonly values: readonly number[] }[]
+  /** One number per point of the grid, the last axis running fastest. */
+  readonly metrics: Readonly<Record<string, readonly number[]>>
+  readonly interrupted: boolean
+}
+
+interface Shared {
+  readonly stack: Stack
+  readonly question: SweepQuestion
+}
+
+const DIRECTION_AXES = ['theta', 'phi', 'wavelength']
+
+/** A block of points of the grid, by index; returns the metrics of each point in turn. */
+export const sweepBlock: Task<Shared, { from: number; to: number }, number[]> = {
+  name: 'sweepBlock',
+  prepare: async ({ stack, question }) => {
+    await prepareStack(stack)
+    const { axes, links } = question
+    const variables = axes.map((axis) => axis.path)
+    for (const link of links) await prepareFormula(link.expression, variables)
+    const parameterAxes = axes.filter((axis) => !DIRECTION_AXES.includes(axis.path))
+    const paths = [...parameterAxes.map((axis) => axis.path), ...links.map((link) => link.path)]
+    const withParameters = compileParameters(stack, paths)
+    return ({ from, to }) => {
+      const out: number[] = []
+      let scene = new Scene(stack)
+      for (let point = from; point < to; point++) {
+        const at = gridPoint(axes, point)
+        const linked = links.map((link) =>
+          fromDisplay(formulaAt(link.expression, displayed(axes, at), variables), link.kind),
+        )
+        const changed = withParameters([...parameterAxes.map((axis) => at[axis.path]), ...linked])
+        if (at.wavelength !== undefined) scene = new Scene(stack, band(at.wavelength, question.bandNm))
+        for (const request of question.requests) {
+          const theta = at.theta ?? request.theta
+          const phi = at.phi ?? request.phi
+          const look = DIRECTION_AXES.some((name) => at[name] !== undefined)
+            ? scene.lookOnce(changed, theta, phi)
+            : scene.look(changed, theta, phi)
+          out.push(metricValue(scene, changed, look, { ...request, theta, phi }))
+        }
+      }
+      return out
+    }
+  },
+}
+
+/** Points handed out at once. */
+const BLOCK = 32
+
+export async function sweep(
+  stack: Stack,
+  question: SweepQuestion,
+  hooks: Hooks = {},
+  map: ParallelMap = mapInline,
+): Promise<Sweep> {
+  const count = question.axes.reduce((product, axis) => product * axis.values.length, 1)
+  const blocks = Array.from({ length: Math.ceil(count / BLOCK) }, (_, k) => ({
+    from: k * BLOCK,
+    to: Math.min(count, (k + 1) * BLOCK),
+  }))
+  const results = await map(sweepBlock, { stack, question }, blocks, hooks)
+  const firstMissing = results.indexOf(undefined)
+  const values = (firstMissing < 0 ? results : results.slice(0, firstMissing)).flatMap((block) => block ?? [])
+  const width = question.requests.length
+  const names = question.requests.map((request) => metricKey(request, question.requests))
+  return {
+    title: stack.title,
+    axes: question.axes.map(({ path, kind, values: axisValues }) => ({
+      path,
+      unit: kind,
+      values: axisValues.map((value) => toDisplay(value, kind)),
+    })),
+    metrics: Object.fromEntries(names.map((name, m) => [name, values.filter((_, k) => k % width === m)])),
+    interrupted: firstMissing >= 0,
+  }
+}
+
+function gridPoint(axes: readonly SweepAxis[], point: number): Record<string, number> {
+  const at: Record<string, number> = {}
+  let rest = point
+  for (const { path, values } of [...axes].reverse()) {
+    at[path] = values[rest % values.length]
+    rest = Math.floor(rest / values.length)
+  }
+  return at
+}
+
+function displayed(axes: readonly SweepAxis[], at: Readonly<Record<string, number>>): Record<string, number> {
+  return Object.fromEntries(axes.map(({ path, kind }) => [path, toDisplay(at[path], kind)]))
+}
+
+/** Five wavelengths evenly through the band. */
+function band(centerNm: number, widthNm: number): Float64Array {
+  return Float64Array.from([-0.4, -0.2, 0, 0.2, 0.4], (share) => centerNm + share * widthNm)
+}

@@ -7,7 +7,7 @@ import { Scene } from '../appearance/scene.js'
 import { formulaAt, prepareFormula } from '../materials/formula.js'
 import { compileParameters } from '../stack/parameters.js'
 import type { MetricRequest, Stack } from '../stack/stack.js'
-import { fromDisplay, type QuantityKind, toDisplay } from '../units/quantity.js'
+import { fromPlain, type QuantityKind, toPlain } from '../units/quantity.js'
 import type { Hooks } from './hooks.js'
 import { metricKey } from './metricKey.js'
 import { mapInline, type ParallelMap, type Task } from './parallel.js'
@@ -21,7 +21,7 @@ export interface SweepAxis {
   readonly values: readonly number[]
 }
 
-/** A parameter that follows the axes: an expression in their paths, in display units (nm, degrees, percent). */
+/** A parameter that follows the axes: an expression in their paths, in nm, degrees, fractions. */
 export interface SweepLink {
   readonly path: string
   readonly kind: QuantityKind
@@ -39,7 +39,7 @@ export interface SweepQuestion {
 
 export interface Sweep {
   readonly title: string
-  /** Values in display units: nm, degrees, percent for shares. */
+  /** Values in nm, degrees, fractions. */
   readonly axes: readonly { readonly path: string; readonly unit: QuantityKind; readonly values: readonly number[] }[]
   /** One number per point of the grid, the last axis running fastest. */
   readonly metrics: Readonly<Record<string, readonly number[]>>
@@ -70,7 +70,7 @@ export const sweepBlock: Task<Shared, { from: number; to: number }, number[]> = 
       for (let point = from; point < to; point++) {
         const at = gridPoint(axes, point)
         const linked = links.map((link) =>
-          fromDisplay(formulaAt(link.expression, displayed(axes, at), variables), link.kind),
+          fromPlain(formulaAt(link.expression, plainValues(axes, at), variables), link.kind),
         )
         const changed = withParameters([...parameterAxes.map((axis) => at[axis.path]), ...linked])
         if (at.wavelength !== undefined) scene = new Scene(stack, band(at.wavelength, question.bandNm))
@@ -112,7 +112,7 @@ export async function sweep(
     axes: question.axes.map(({ path, kind, values: axisValues }) => ({
       path,
       unit: kind,
-      values: axisValues.map((value) => toDisplay(value, kind)),
+      values: axisValues.map((value) => toPlain(value, kind)),
     })),
     metrics: Object.fromEntries(names.map((name, m) => [name, values.filter((_, k) => k % width === m)])),
     interrupted: firstMissing >= 0,
@@ -129,8 +129,8 @@ function gridPoint(axes: readonly SweepAxis[], point: number): Record<string, nu
   return at
 }
 
-function displayed(axes: readonly SweepAxis[], at: Readonly<Record<string, number>>): Record<string, number> {
-  return Object.fromEntries(axes.map(({ path, kind }) => [path, toDisplay(at[path], kind)]))
+function plainValues(axes: readonly SweepAxis[], at: Readonly<Record<string, number>>): Record<string, number> {
+  return Object.fromEntries(axes.map(({ path, kind }) => [path, toPlain(at[path], kind)]))
 }
 
 /** Five wavelengths evenly through the band. */

@@ -115,8 +115,12 @@ export function formatQuantity(value: number, kind: QuantityKind, digits?: numbe
   return unit === '' ? number : `${number} ${unit}`
 }
 
-/** The inverse of `toDisplay`. */
-export function fromDisplay(shown: number, kind: QuantityKind): number {
-  if (kind === 'angle') return degreesToRad(shown)
-  return kind === 'share' ? shown / 100 : shown
+/** Internal value as it stands in JSON, CSV and links: degrees for angles, else nm, fractions, …; no rounding noise. */
+export function toPlain(value: number, kind: QuantityKind): number {
+  return kind === 'angle' ? toDisplay(value, kind) : value
+}
+
+/** The inverse of `toPlain`. */
+export function fromPlain(plain: number, kind: QuantityKind): number {
+  return kind === 'angle' ? degreesToRad(plain) : plain
 }

@@ -1,0 +1,66 @@
+/** The `optimize` question of a stack as functions of its parameters, in the terms of `search/`. */
+import { createExperiment } from '../appearance/experiment.js'
+import { wavelengthsOf } from '../appearance/wavelengths.js'
+import type { SearchProblem } from '../search/problem.js'
+import type { Variable } from '../search/variables.js'
+import { findParameter } from '../stack/parameters.js'
+import type { MetricRequest, Objective, OptimizeQuestion, Range, Stack } from '../stack/stack.js'
+import { limitMargin } from './evaluate.js'
+
+/** Wavelengths kept for choosing starts: enough to rank them, a quarter of the work. */
+const SCREEN_STRIDE = 4
+const SCREEN_LEAST = 16
+
+export function designVariables(stack: Stack, { vary }: OptimizeQuestion): Variable[] {
+  return Object.entries(vary).map(([path, range]) => variableOf(stack, path, range))
+}
+
+function variableOf(stack: Stack, path: string, range: Range): Variable {
+  const period = findParameter(stack, path)?.period
+  const shared = period !== undefined ? { period } : {}
+  if ('from' in range) return { lower: range.from, upper: range.to, ...shared }
+  const values = [...range.values].sort((a, b) => a - b)
+  return { lower: values[0], upper: values[values.length - 1], values, ...shared }
+}
+
+/** Objective (with the sign of a minimum), constraints and screen; fresh, so that a job's digits are its own. */
+export function designProblem(stack: Stack, question: OptimizeQuestion): SearchProblem {
+  const variables = designVariables(stack, question)
+  const paths = Object.keys(question.vary)
+  const wavelengths = wavelengthsOf(stack.conditions)
+  const stride = Math.max(1, Math.min(SCREEN_STRIDE, Math.floor(wavelengths.length / SCREEN_LEAST)))
+  const coarse = wavelengths.filter((_, i) => i % stride === 0)
+  return {
+    variables,
+    objective: meanOverViews(stack, paths, question.minimize),
+    screen: meanOverViews(stack, paths, question.minimize, coarse),
+    ...(question.subject_to.length > 0 && { constraints: constraintsOf(stack, paths, question) }),
+  }
+}
+
+/** Weighted mean of the metric over the views, times the sense of the search. */
+function meanOverViews(stack: Stack, paths: readonly string[], objective: Objective, wavelengths?: Float64Array) {
+  const requests = objectiveRequests(objective)
+  const experiment = createExperiment(stack, paths, requests, wavelengths)
+  const values = new Float64Array(requests.length)
+  const total = objective.views.reduce((sum, view) => sum + view.weight, 0)
+  return (x: Float64Array): number => {
+    experiment(x, values)
+    let sum = 0
+    for (let k = 0; k < values.length; k++) sum += objective.views[k].weight * values[k]
+    return (objective.sense * sum) / total
+  }
+}
+
+export function objectiveRequests({ metric, illuminance, views }: Objective): MetricRequest[] {
+  return views.map(({ theta, phi }) => ({ metric, theta, phi, ...(illuminance !== undefined && { illuminance }) }))
+}
+
+function constraintsOf(stack: Stack, paths: readonly string[], { subject_to }: OptimizeQuestion) {
+  const experiment = createExperiment(stack, paths, subject_to)
+  const values = new Float64Array(subject_to.length)
+  return (x: Float64Array): number[] => {
+    experiment(x, values)
+    return subject_to.map((limit, k) => -limitMargin(limit, values[k]))
+  }
+}

@@ -7,7 +7,7 @@ import { xyzToLab } from '../color/cielab.js'
 import { ambientContrast } from '../color/contrast.js'
 import { illuminantAt } from '../color/illuminant.js'
 import { type ColorWeights, createColorWeights } from '../color/weights.js'
-import { Solver } from '../optics/solver.js'
+import { type Front, Solver } from '../optics/solver.js'
 import type { Direction, Stack } from '../stack/stack.js'
 import { emissionStokesAt } from './emissionStokes.js'
 import { OpticalStack } from './opticalStack.js'
@@ -47,7 +47,11 @@ export class Scene {
   private readonly colorWeights: readonly [number, number, number]
 
   /** The conditions and the emission's spectrum of `stack` are those of all later looks. */
-  constructor(stack: Stack, wavelengthsNm: Float64Array = wavelengthsOf(stack.conditions)) {
+  constructor(
+    stack: Stack,
+    wavelengthsNm: Float64Array = wavelengthsOf(stack.conditions),
+    private readonly front: Front = 'real',
+  ) {
     const { observer, illuminant, color_weights } = stack.conditions
     this.wavelengthsNm = wavelengthsNm
     this.weights = createColorWeights(wavelengthsNm, observer, illuminantAt(illuminant, wavelengthsNm))
@@ -125,7 +129,10 @@ export class Scene {
     let found = this.solvers.get(key)
     if (found === undefined) {
       if (this.solvers.size >= SOLVERS_KEPT) this.solvers.clear()
-      found = { solver: new Solver(this.wavelengthsNm), emission: new Float64Array(this.wavelengthsNm.length) }
+      found = {
+        solver: new Solver(this.wavelengthsNm, this.front),
+        emission: new Float64Array(this.wavelengthsNm.length),
+      }
       this.solvers.set(key, found)
     }
     return found

@@ -13,10 +13,14 @@ import { createLayerModes, type LayerModes } from './layerModes.js'
 import { createMedium, type Medium, type OpticalLayer, type PanelEnd } from './opticalLayer.js'
 import { createPacket, faceBetween, type Packet } from './packet.js'
 import { type EmissionStokes, fillMirror } from './panel.js'
+import { perfectFace } from './perfectFace.js'
 import { fillPlanarModes } from './planarModes.js'
 import { fillTiltedModes } from './tiltedModes.js'
 
 const UNPOLARIZED: EmissionStokes = [1, 0, 0, 0]
+
+/** The faces and coherent layers above the first thick layer: as they are, or reflecting nothing. */
+export type Front = 'real' | 'perfect'
 
 /** A medium's matrices and what they were computed from. */
 export interface Slot {
@@ -69,7 +73,11 @@ export class Solver {
   cosTheta = 1
   private trial: Slot[] = []
 
-  constructor(readonly wavelengthsNm: Float64Array) {
+  /** `front: 'perfect'` puts a perfect antireflection (`perfectFace`) in the place of the first packet. */
+  constructor(
+    readonly wavelengthsNm: Float64Array,
+    private readonly front: Front = 'real',
+  ) {
     const n = wavelengthsNm.length
     this.reflectance = new Float64Array(n)
     this.frontReflectance = new Float64Array(n)
@@ -325,6 +333,10 @@ export class Solver {
 
   private joinSegment(slots: readonly Slot[], first: number, last: number, packet: Packet): void {
     const n = this.wavelengthsNm.length
+    if (first === 0 && this.front === 'perfect') {
+      perfectFace(slots[0].modes, slots[last].modes, packet, n)
+      return
+    }
     faceBetween(slots[last - 1].modes, slots[last].modes, packet, n)
     for (let k = last - 1; k > first; k--) {
       faceBetween(slots[k - 1].modes, slots[k].modes, this.face, n)

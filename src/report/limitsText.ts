@@ -1,0 +1,43 @@
+import { METRIC_QUANTITIES } from '../charts/quantity.js'
+import type { LimitEvaluation } from '../studies/evaluate.js'
+import { given } from './decimals.js'
+import { metricWithUnit } from './metricNumber.js'
+import type { Paint } from './paint.js'
+import { textTable } from './textTable.js'
+
+const COLUMNS = (['left', 'left', 'left', 'right', 'left'] as const).map((align) => ({ heading: '', align }))
+
+/** One line a limit: what is asked, what came, met or not and by how much; and how many are met. */
+export function limitsText(limits: readonly LimitEvaluation[], paint: Paint): string {
+  if (limits.length === 0) return 'no limits in the file'
+  const met = limits.filter((limit) => limit.met).length
+  const count = `limits: ${met} of ${limits.length} met`
+  const rows = limits.map((limit) => [
+    `  ${METRIC_QUANTITIES[limit.metric].label}${levelText(limit)}`,
+    `θ ${given(limit.theta_deg)}° φ ${given(limit.phi_deg)}°`,
+    askedText(limit),
+    metricWithUnit(limit.metric, limit.value),
+    verdictText(limit, paint),
+  ])
+  return `${met === limits.length ? paint.strong(count) : paint.bad(count)}\n${textTable(COLUMNS, rows)}`
+}
+
+function levelText({ illuminance_lx }: LimitEvaluation): string {
+  return illuminance_lx === undefined ? '' : ` at ${given(illuminance_lx)} lx`
+}
+
+function askedText({ metric, max, min }: LimitEvaluation): string {
+  const { unit, factor } = METRIC_QUANTITIES[metric]
+  const shown = (value: number): string => `${given(factor * value)}${unit === '' ? '' : ` ${unit}`}`
+  const parts = [
+    ...(min !== undefined ? [`at least ${shown(min)}`] : []),
+    ...(max !== undefined ? [`at most ${shown(max)}`] : []),
+  ]
+  return parts.join(', ')
+}
+
+function verdictText({ metric, margin, met, value }: LimitEvaluation, paint: Paint): string {
+  if (Number.isNaN(value)) return paint.bad('missed: does not apply to this stack')
+  const amount = metricWithUnit(metric, Math.abs(margin))
+  return met ? paint.good(`met, ${amount} to spare`) : paint.bad(`missed by ${amount}`)
+}

@@ -37,6 +37,19 @@ export class OpticalStack {
     return this.optical
   }
 
+  /**
+   * Layers and panel of a stack that differs from `base` (the one last asked for) in a few places, without touching what is
+   * kept: where nothing changed the very objects of `base`.
+   */
+  variantOf(stack: Stack, base: Stack): { layers: OpticalLayer[]; panel: PanelEnd } {
+    return {
+      layers: stack.layers.map((layer, k) =>
+        layer === base.layers[k] ? this.optical[k] : this.turnedFrom(this.kept[k], layer),
+      ),
+      panel: stack.panel === base.panel ? this.panelOf(base) : this.panelEnd(stack.panel),
+    }
+  }
+
   panelOf({ panel }: Stack): PanelEnd {
     if (this.panel === panel && this.end !== undefined) return this.end
     this.panel = panel
@@ -47,16 +60,20 @@ export class OpticalStack {
   private opticalLayer(layer: Layer, k: number): OpticalLayer {
     const kept = this.kept[k]
     if (kept?.layer === layer) return kept.optical
-    const medium = kept !== undefined && sameMedium(kept.layer, layer) ? kept.optical.medium : this.mediumOf(layer)
-    const optical: OpticalLayer = {
-      medium,
+    const optical = this.turnedFrom(kept, layer)
+    this.kept[k] = { layer, optical }
+    return optical
+  }
+
+  /** The layer's optics, with the medium of what was kept where only angles changed. */
+  private turnedFrom(kept: Kept | undefined, layer: Layer): OpticalLayer {
+    return {
+      medium: kept !== undefined && sameMedium(kept.layer, layer) ? kept.optical.medium : this.mediumOf(layer),
       azimuthRad: azimuthOf(layer),
       tiltRad: layer.kind === 'crystal' ? layer.tilt : 0,
       thicknessNm: layer.thickness,
       coherent: layer.coherent,
     }
-    this.kept[k] = { layer, optical }
-    return optical
   }
 
   private mediumOf(layer: Layer): Medium {

@@ -27,8 +27,8 @@ export function polarizerIndices(
   }
 }
 
-/** Internal principal transmittances [T1, T2] over wavelength, fractions. */
-function internalTransmittances(
+/** Internal principal transmittances [T1, T2] over wavelength, fractions; `n` is the film's index. */
+export function internalTransmittances(
   layer: PolarizerLayer,
   n: Float64Array,
   wavelengthsNm: Float64Array,
@@ -52,7 +52,7 @@ function internalTransmittances(
 }
 
 /** Least internal transmittance taken: ln 0 has no k. */
-const SMALLEST_TRANSMITTANCE = 1e-12
+export const SMALLEST_TRANSMITTANCE = 1e-12
 
 /**
  * T of K = (1 - ρ)² T/(1 - ρ² T²): the positive root of ρ² K T² + (1 - ρ)² T - K = 0, written so that nothing cancels.

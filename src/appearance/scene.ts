@@ -41,10 +41,10 @@ const SOLVERS_KEPT = 256
 export class Scene {
   readonly wavelengthsNm: Float64Array
   readonly weights: ColorWeights
-  private readonly emissionWeights: Float64Array
+  readonly emissionWeights: Float64Array
   private readonly opticalStack: OpticalStack
   private readonly solvers = new Map<string, Eye>()
-  private readonly colorWeights: readonly [number, number, number]
+  readonly colorWeights: readonly [number, number, number]
 
   /** The conditions and the emission's spectrum of `stack` are those of all later looks. */
   constructor(
@@ -69,6 +69,11 @@ export class Scene {
   /** Looks from one of many directions: a single solver moves on, keeping what the next azimuth shares with the last. */
   lookOnce(stack: Stack, theta: number, phi: number): Look {
     return this.see(this.solverAt('moving'), stack, theta, phi)
+  }
+
+  /** Optics of a stack next to the one looked at last, for `Sensitivity`. */
+  variantOf(stack: Stack, base: Stack) {
+    return this.opticalStack.variantOf(stack, base)
   }
 
   private see({ solver, emission }: Eye, stack: Stack, theta: number, phi: number): Look {

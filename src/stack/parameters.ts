@@ -71,6 +71,22 @@ export function compileParameters(stack: Stack, paths: readonly string[]): (valu
   }
 }
 
+/** One parameter as a setter on stacks of the same structure as `stack`; everything else is shared with the stack given. */
+export function compileSetter(stack: Stack, path: string): (base: Stack, value: number) => Stack {
+  const { field, place } = resolve(stack, path)
+  if (place === 'panel') {
+    return (base, value) => ({ ...base, panel: field.set(asOwner(base.panel), value) as unknown as Panel })
+  }
+  if (place === 'emission') {
+    return (base, value) => ({ ...base, emission: field.set(asOwner(base.emission), value) as unknown as Emission })
+  }
+  return (base, value) => {
+    const layers = base.layers.slice()
+    layers[place] = field.set(asOwner(layers[place]), value) as unknown as Layer
+    return { ...base, layers }
+  }
+}
+
 type Place = number | 'panel' | 'emission'
 
 /** The parameters that sit in one layer (or the panel), with the values and the object of the last call. */

@@ -1,5 +1,7 @@
 /** The `optimize` question of a stack as functions of its parameters, in the terms of `search/`. */
 import { createExperiment } from '../appearance/experiment.js'
+import { createGradientExperiment } from '../appearance/gradientExperiment.js'
+import { isSpectral } from '../appearance/metricWeights.js'
 import { wavelengthsOf } from '../appearance/wavelengths.js'
 import type { SearchProblem } from '../search/problem.js'
 import type { Variable } from '../search/variables.js'
@@ -34,6 +36,7 @@ export function designProblem(stack: Stack, question: OptimizeQuestion): SearchP
     variables,
     objective: meanOverViews(stack, paths, question.minimize),
     screen: meanOverViews(stack, paths, question.minimize, coarse),
+    ...gradientOf(stack, paths, question.minimize),
     ...(question.subject_to.length > 0 && { constraints: constraintsOf(stack, paths, question) }),
   }
 }
@@ -50,6 +53,14 @@ function meanOverViews(stack: Stack, paths: readonly string[], objective: Object
     for (let k = 0; k < values.length; k++) sum += objective.views[k].weight * values[k]
     return (objective.sense * sum) / total
   }
+}
+
+/** The same with its gradient, where the metric has one. */
+function gradientOf(stack: Stack, paths: readonly string[], { metric, sense, views }: Objective) {
+  if (!isSpectral(metric)) return {}
+  const total = views.reduce((sum, view) => sum + view.weight, 0)
+  const weighted = views.map((view) => ({ ...view, weight: (sense * view.weight) / total }))
+  return { objectiveWithGradient: createGradientExperiment(stack, paths, metric, weighted) }
 }
 
 export function objectiveRequests({ metric, illuminance, views }: Objective): MetricRequest[] {

@@ -9,6 +9,6 @@ export function clopperPearson(successes: number, count: number, level: number):
   const failures = count - successes
   return [
     successes === 0 ? 0 : inverseIncompleteBeta(tail, successes, failures + 1),
-    failures === 0 ? 1 : 1 - inverseIncompleteBeta(tail, failures, successes + 1),
+    failures === 0 ? 1 : inverseIncompleteBeta(1 - tail, successes + 1, failures),
   ]
 }

@@ -11,7 +11,7 @@ import { type Front, Solver } from '../optics/solver.js'
 import type { Direction, Stack } from '../stack/stack.js'
 import { emissionStokesAt } from './emissionStokes.js'
 import { OpticalStack } from './opticalStack.js'
-import { wavelengthsOf } from './wavelengths.js'
+import { wavelengthsOf } from '../stack/wavelengths.js'
 
 /** What the eye gets from one direction; fractions. Spectra are views that hold until the scene looks from there again. */
 export interface Look extends Direction {
@@ -124,7 +124,8 @@ export class Scene {
     })
   }
 
-  private emissionShare(stack: Stack, look: Look): number {
+  /** Luminance of the lit screen in this direction over that on axis. */
+  emissionShare(stack: Stack, look: Look): number {
     if (look.theta === 0 || look.luminousEmissionTransmittance === undefined) return 1
     const onAxis = this.look(stack, 0, 0).luminousEmissionTransmittance
     return onAxis === undefined ? 1 : look.luminousEmissionTransmittance / onAxis

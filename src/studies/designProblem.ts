@@ -2,7 +2,7 @@
 import { createExperiment } from '../appearance/experiment.js'
 import { createGradientExperiment } from '../appearance/gradientExperiment.js'
 import { isSpectral } from '../appearance/metricWeights.js'
-import { wavelengthsOf } from '../appearance/wavelengths.js'
+import { wavelengthsOf } from '../stack/wavelengths.js'
 import type { SearchProblem } from '../search/problem.js'
 import type { Variable } from '../search/variables.js'
 import { findParameter } from '../stack/parameters.js'
@@ -12,6 +12,12 @@ import { limitMargin } from './evaluate.js'
 /** Wavelengths kept for choosing starts: enough to rank them, a quarter of the work. */
 const SCREEN_STRIDE = 4
 const SCREEN_LEAST = 16
+
+/** Every few wavelengths of the band, evenly. */
+export function coarseWavelengths(wavelengths: Float64Array): Float64Array {
+  const stride = Math.max(1, Math.min(SCREEN_STRIDE, Math.floor(wavelengths.length / SCREEN_LEAST)))
+  return wavelengths.filter((_, i) => i % stride === 0)
+}
 
 export function designVariables(stack: Stack, { vary }: OptimizeQuestion): Variable[] {
   return Object.entries(vary).map(([path, range]) => variableOf(stack, path, range))
@@ -26,23 +32,25 @@ function variableOf(stack: Stack, path: string, range: Range): Variable {
 }
 
 /** Objective (with the sign of a minimum), constraints and screen; fresh, so that a job's digits are its own. */
-export function designProblem(stack: Stack, question: OptimizeQuestion): SearchProblem {
+export function designProblem(
+  stack: Stack,
+  question: OptimizeQuestion,
+  wavelengths: Float64Array = wavelengthsOf(stack.conditions),
+): SearchProblem {
   const variables = designVariables(stack, question)
   const paths = Object.keys(question.vary)
-  const wavelengths = wavelengthsOf(stack.conditions)
-  const stride = Math.max(1, Math.min(SCREEN_STRIDE, Math.floor(wavelengths.length / SCREEN_LEAST)))
-  const coarse = wavelengths.filter((_, i) => i % stride === 0)
+  const coarse = coarseWavelengths(wavelengths)
   return {
     variables,
-    objective: meanOverViews(stack, paths, question.minimize),
+    objective: meanOverViews(stack, paths, question.minimize, wavelengths),
     screen: meanOverViews(stack, paths, question.minimize, coarse),
-    ...gradientOf(stack, paths, question.minimize),
-    ...(question.subject_to.length > 0 && { constraints: constraintsOf(stack, paths, question) }),
+    ...gradientOf(stack, paths, question.minimize, wavelengths),
+    ...(question.subject_to.length > 0 && { constraints: constraintsOf(stack, paths, question, wavelengths) }),
   }
 }
 
 /** Weighted mean of the metric over the views, times the sense of the search. */
-function meanOverViews(stack: Stack, paths: readonly string[], objective: Objective, wavelengths?: Float64Array) {
+function meanOverViews(stack: Stack, paths: readonly string[], objective: Objective, wavelengths: Float64Array) {
   const requests = objectiveRequests(objective)
   const experiment = createExperiment(stack, paths, requests, wavelengths)
   const values = new Float64Array(requests.length)
@@ -56,19 +64,29 @@ function meanOverViews(stack: Stack, paths: readonly string[], objective: Object
 }
 
 /** The same with its gradient, where the metric has one. */
-function gradientOf(stack: Stack, paths: readonly string[], { metric, sense, views }: Objective) {
+function gradientOf(
+  stack: Stack,
+  paths: readonly string[],
+  { metric, sense, views }: Objective,
+  wavelengths: Float64Array,
+) {
   if (!isSpectral(metric)) return {}
   const total = views.reduce((sum, view) => sum + view.weight, 0)
   const weighted = views.map((view) => ({ ...view, weight: (sense * view.weight) / total }))
-  return { objectiveWithGradient: createGradientExperiment(stack, paths, metric, weighted) }
+  return { objectiveWithGradient: createGradientExperiment(stack, paths, metric, weighted, wavelengths) }
 }
 
 export function objectiveRequests({ metric, illuminance, views }: Objective): MetricRequest[] {
   return views.map(({ theta, phi }) => ({ metric, theta, phi, ...(illuminance !== undefined && { illuminance }) }))
 }
 
-function constraintsOf(stack: Stack, paths: readonly string[], { subject_to }: OptimizeQuestion) {
-  const experiment = createExperiment(stack, paths, subject_to)
+function constraintsOf(
+  stack: Stack,
+  paths: readonly string[],
+  { subject_to }: OptimizeQuestion,
+  wavelengths: Float64Array,
+) {
+  const experiment = createExperiment(stack, paths, subject_to, wavelengths)
   const values = new Float64Array(subject_to.length)
   return (x: Float64Array): number[] => {
     experiment(x, values)

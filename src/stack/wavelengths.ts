@@ -1,4 +1,4 @@
-import type { Conditions } from '../stack/stack.js'
+import type { Conditions } from './stack.js'
 
 /** The wavelengths of the conditions, nm: from, from + step, … up to `to` (a step that does not divide ends short of it). */
 export function wavelengthsOf({ wavelengths: { from, to, step } }: Conditions): Float64Array {

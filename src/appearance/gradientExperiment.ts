@@ -35,8 +35,9 @@ export function createGradientExperiment(
   paths: readonly string[],
   metric: SpectralMetric,
   views: readonly WeightedView[],
+  wavelengthsNm?: Float64Array,
 ): GradientExperiment {
-  const scene = new Scene(stack)
+  const scene = new Scene(stack, wavelengthsNm)
   const withParameters = compileParameters(stack, paths)
   const parameters = paths.map((path) => ({
     set: compileSetter(stack, path),

@@ -35,7 +35,7 @@ async function answer(
   try {
     if (setup === undefined) throw new Error('the task of this job was not prepared')
     const run = await setup
-    port.post({ kind: 'done', ticket, result: run(job) })
+    port.post({ kind: 'done', ticket, result: await run(job) })
   } catch (error) {
     port.post({ kind: 'failed', ticket, fault: faultOf(error) })
   }

@@ -5,12 +5,10 @@
 import { Scene } from '../appearance/scene.js'
 import { illuminantAt } from '../color/illuminant.js'
 import { createColorWeights } from '../color/weights.js'
-import type { Stack } from '../stack/stack.js'
+import type { Direction, Stack } from '../stack/stack.js'
 import { degrees } from './evaluate.js'
 
-export interface EyewearQuestion {
-  readonly theta: number
-  readonly phi: number
+export interface EyewearQuestion extends Direction {
   /** rad; the roll runs from 0 to below 180°. */
   readonly rollStep: number
   /** Transmittance of the lens across its axis over that along it (0: an ideal polarizer). */
@@ -21,37 +19,85 @@ export interface Eyewear {
   readonly title: string
   readonly theta_deg: number
   readonly phi_deg: number
+  /** X, Y, Z of the lit screen without the lens, Y = 100. */
+  readonly bare_xyz: Xyz
   readonly rolls: readonly EyewearRoll[]
   readonly summary: {
     readonly darkest: EyewearRoll
     readonly brightest: EyewearRoll
+    /** Of the rolls that are not all but black (1 % of the brightest). */
     readonly largest_color_shift: EyewearRoll
   }
 }
 
+type Xyz = readonly [number, number, number]
+
 /** Seen through the lens with its transmission axis at `roll_deg`, counter-clockwise from three o'clock. */
 export interface EyewearRoll {
   readonly roll_deg: number
-  /** Against the same screen emitting unpolarized light: 1 means the lens takes no more than from any lamp. */
-  readonly relative_luminance: number
-  /** X, Y, Z with Y = 100 for the same screen emitting unpolarized light. */
-  readonly xyz: readonly [number, number, number]
-  /** CIE 1976 u'v' distance from the screen seen without the lens. */
+  /** Share of the screen's luminance that passes a lens which is clear along its axis: ½ of unpolarized light. */
+  readonly transmittance: number
+  /** cd/m2, where the stack file states the luminance. */
+  readonly luminance?: number
+  /** X, Y, Z with Y = 100 for the screen without the lens. */
+  readonly xyz: Xyz
+  /** CIE 1976 u'v' distance from the screen without the lens. */
   readonly delta_uv: number
 }
 
+/** Rolls darker than this share of the brightest have no color to speak of. */
+const BLACK = 0.01
+
 /** Needs a mirror panel, whose emission the stack file describes. */
-export function eyewear(stack: Stack, question: EyewearQuestion): Eyewear {
+export function eyewear(stack: Stack, { theta, phi, rollStep, lensLeakage = 0 }: EyewearQuestion): Eyewear {
   const scene = new Scene(stack)
   const n = scene.wavelengthsNm.length
-  const { solver } = scene.look(stack, question.theta, question.phi)
+  const look = scene.look(stack, theta, phi)
   const stokes = new Float64Array(4 * n)
-  solver.emissionStokes(stokes)
-  const emitted = illuminantAt(stack.emission.spectrum, scene.wavelengthsNm)
-  const weights = createColorWeights(scene.wavelengthsNm, stack.conditions.observer, emitted)
-  const tristimulus = (light: (i: number) => number): [number, number, number] => {
+  look.solver.emissionStokes(stokes)
+  const luminance = stack.emission.luminance * scene.emissionShare(stack, look)
+  const tristimulus = createTristimulus(stack, scene.wavelengthsNm)
+  const bare = tristimulus((i) => stokes[i])
+  const relative = (xyz: Xyz): Xyz => [(100 * xyz[0]) / bare[1], (100 * xyz[1]) / bare[1], (100 * xyz[2]) / bare[1]]
+  const rolls = rollAngles(rollStep).map((roll): EyewearRoll => {
+    // From the plane of incidence to the axis of the lens; y' lies clockwise of x' as the viewer sees it.
+    const angle = 2 * (phi - roll)
+    const [c, s] = [Math.cos(angle), Math.sin(angle)]
+    const through = tristimulus((i) => {
+      const [all, linear] = [stokes[i], c * stokes[n + i] + s * stokes[2 * n + i]]
+      return ((1 + lensLeakage) * all + (1 - lensLeakage) * linear) / 2
+    })
+    const transmittance = through[1] / bare[1]
+    return {
+      roll_deg: degrees(roll),
+      transmittance,
+      ...(luminance > 0 && { luminance: luminance * transmittance }),
+      xyz: relative(through),
+      delta_uv: uvDistance(through, bare),
+    }
+  })
+  return {
+    title: stack.title,
+    theta_deg: degrees(theta),
+    phi_deg: degrees(phi),
+    bare_xyz: relative(bare),
+    rolls,
+    summary: summarize(rolls),
+  }
+}
+
+function rollAngles(step: number): number[] {
+  const count = Math.max(1, Math.round(Math.PI / step))
+  return Array.from({ length: count }, (_, k) => (k * Math.PI) / count)
+}
+
+/** X, Y, Z of light given relative to what the panel emits. */
+function createTristimulus(stack: Stack, wavelengthsNm: Float64Array): (light: (i: number) => number) => Xyz {
+  const emitted = illuminantAt(stack.emission.spectrum, wavelengthsNm)
+  const weights = createColorWeights(wavelengthsNm, stack.conditions.observer, emitted)
+  return (light) => {
     const sum: [number, number, number] = [0, 0, 0]
-    for (let i = 0; i < n; i++) {
+    for (let i = 0; i < wavelengthsNm.length; i++) {
       const value = light(i)
       sum[0] += weights.x[i] * value
       sum[1] += weights.y[i] * value
@@ -59,44 +105,28 @@ export function eyewear(stack: Stack, question: EyewearQuestion): Eyewear {
     }
     return sum
   }
-  const bare = tristimulus((i) => stokes[i])
-  const leakage = question.lensLeakage ?? 0
-  const contrast = (1 - leakage) / (1 + leakage)
-  const rolls: EyewearRoll[] = []
-  const count = Math.max(1, Math.round(Math.PI / question.rollStep))
-  for (let k = 0; k < count; k++) {
-    const roll = (k * Math.PI) / count
-    // Axis of the lens to the plane of incidence, y' lying clockwise of x' as the viewer sees it.
-    const angle = 2 * (question.phi - roll)
-    const through = tristimulus(
-      (i) => stokes[i] + contrast * (Math.cos(angle) * stokes[n + i] + Math.sin(angle) * stokes[2 * n + i]),
-    )
-    const xyz = through.map((value) => (100 * value) / bare[1]) as [number, number, number]
-    rolls.push({ roll_deg: degrees(roll), relative_luminance: xyz[1] / 100, xyz, delta_uv: uvDistance(through, bare) })
-  }
-  const extreme = (better: (a: EyewearRoll, b: EyewearRoll) => boolean) =>
-    rolls.reduce((a, b) => (better(b, a) ? b : a))
+}
+
+function summarize(rolls: readonly EyewearRoll[]): Eyewear['summary'] {
+  const extreme = (among: readonly EyewearRoll[], better: (a: EyewearRoll, b: EyewearRoll) => boolean) =>
+    among.reduce((a, b) => (better(b, a) ? b : a))
+  const brightest = extreme(rolls, (a, b) => a.transmittance > b.transmittance)
+  const visible = rolls.filter(({ transmittance }) => transmittance >= BLACK * brightest.transmittance)
   return {
-    title: stack.title,
-    theta_deg: degrees(question.theta),
-    phi_deg: degrees(question.phi),
-    rolls,
-    summary: {
-      darkest: extreme((a, b) => a.relative_luminance < b.relative_luminance),
-      brightest: extreme((a, b) => a.relative_luminance > b.relative_luminance),
-      largest_color_shift: extreme((a, b) => a.delta_uv > b.delta_uv),
-    },
+    darkest: extreme(rolls, (a, b) => a.transmittance < b.transmittance),
+    brightest,
+    largest_color_shift: extreme(visible, (a, b) => a.delta_uv > b.delta_uv),
   }
 }
 
 /** Distance in the CIE 1976 uniform chromaticity diagram (ISO/CIE 11664-5); 0 where nothing comes through. */
-function uvDistance(a: readonly [number, number, number], b: readonly [number, number, number]): number {
+function uvDistance(a: Xyz, b: Xyz): number {
   const [first, second] = [chromaticity(a), chromaticity(b)]
   if (first === undefined || second === undefined) return 0
   return Math.hypot(first[0] - second[0], first[1] - second[1])
 }
 
-function chromaticity([x, y, z]: readonly [number, number, number]): [number, number] | undefined {
+function chromaticity([x, y, z]: Xyz): [number, number] | undefined {
   const sum = x + 15 * y + 3 * z
   return sum > 1e-9 ? [(4 * x) / sum, (9 * y) / sum] : undefined
 }

@@ -8,7 +8,7 @@ import type { Hooks } from './hooks.js'
 export interface Task<Shared, Job, Result> {
   /** Key in `tasks.ts`, by which a worker finds it. */
   readonly name: string
-  readonly prepare: (shared: Shared) => Promise<(job: Job) => Result>
+  readonly prepare: (shared: Shared) => Promise<(job: Job) => Result | Promise<Result>>
 }
 
 /**
@@ -28,7 +28,7 @@ export const mapInline: ParallelMap = async (task, shared, jobs, hooks = {}) => 
   const results = new Array(jobs.length)
   for (let k = 0; k < jobs.length; k++) {
     if (hooks.stopped?.()) break
-    results[k] = run(jobs[k])
+    results[k] = await run(jobs[k])
     hooks.progress?.((k + 1) / jobs.length)
     await Promise.resolve()
   }

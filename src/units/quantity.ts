@@ -1,29 +1,11 @@
+import { textHint, unitHint } from './quantityHint.js'
+import { degreesToRad, type QuantityKind, timesTenTo, UNIT_TABLES } from './unitTables.js'
+
 /**
  * Lengths, angles and shares as people write them, and as the program computes with them: nm, radians, fractions. Number
- * and unit are read apart and multiplied by an exact factor, so that `138 nm` is 138 and nothing else.
+ * and unit are read apart and joined without a rounding of their own, so that `138 nm` is 138 and nothing else.
  */
-export type QuantityKind = 'length' | 'angle' | 'share' | 'number' | 'illuminance' | 'luminance' | 'temperature'
-
-interface UnitTable {
-  /** Meaning of a bare number. */
-  readonly bare: string
-  readonly units: Readonly<Record<string, (value: number) => number>>
-}
-
-const scale = (factor: number) => (value: number) => value * factor
-const same = scale(1)
-/** Value first, then π/180, so that 45 deg is exactly 45 π / 180. */
-const degreesToRad = (value: number) => (value * Math.PI) / 180
-
-const TABLES: Readonly<Record<QuantityKind, UnitTable>> = {
-  length: { bare: 'nm', units: { nm: same, um: scale(1e3), µm: scale(1e3), μm: scale(1e3), mm: scale(1e6) } },
-  angle: { bare: 'deg', units: { deg: degreesToRad, '°': degreesToRad, rad: same } },
-  share: { bare: '', units: { '': same, '%': (value) => value / 100 } },
-  number: { bare: '', units: { '': same } },
-  illuminance: { bare: 'lx', units: { lx: same, klx: scale(1e3) } },
-  luminance: { bare: 'cd/m2', units: { 'cd/m2': same, 'cd/m²': same } },
-  temperature: { bare: 'K', units: { K: same } },
-}
+export type { QuantityKind }
 
 /** How each kind is spelled in a message. */
 const EXAMPLES: Readonly<Record<QuantityKind, string>> = {
@@ -47,17 +29,17 @@ const TEXT = /^\s*([+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?)\s*(\S*)\s*$/i
 
 /** The value in nm, radians, fraction, …; or what is wrong with it. */
 export function parseQuantity(raw: unknown, kind: QuantityKind): number | QuantityFault {
-  const { bare, units } = TABLES[kind]
+  const { bare, units } = UNIT_TABLES[kind]
   if (typeof raw === 'number') {
-    return Number.isFinite(raw) ? units[bare](raw) : fault(raw, kind, 'the number is not finite')
+    return Number.isFinite(raw) ? units[bare](String(raw)) : fault(raw, kind, 'the number is not finite')
   }
   if (typeof raw !== 'string') return fault(raw, kind)
   const match = TEXT.exec(raw)
   if (match === null) return fault(raw, kind, textHint(raw))
-  const value = Number(match[1])
   const unit = match[2] === '' ? bare : match[2]
-  if (!Number.isFinite(value)) return fault(raw, kind, 'the number is not finite')
-  return Object.hasOwn(units, unit) ? units[unit](value) : fault(raw, kind, unitHint(unit, kind))
+  if (!Object.hasOwn(units, unit)) return fault(raw, kind, unitHint(unit, kind))
+  const value = units[unit](match[1])
+  return Number.isFinite(value) ? value : fault(raw, kind, 'the number is not finite')
 }
 
 export function isFault(value: number | QuantityFault): value is QuantityFault {
@@ -72,46 +54,40 @@ function describe(raw: unknown): string {
   if (raw === null || raw === undefined) return 'nothing'
   if (Array.isArray(raw)) return 'a list'
   if (typeof raw === 'object') return 'a mapping'
-  return String(raw).slice(0, 60)
+  return raw === '' ? 'an empty text' : String(raw).slice(0, 60)
 }
 
-function textHint(raw: string): string | undefined {
-  if (/^\s*[+-]?\d+,\d/.test(raw)) return 'write the decimal point as a dot'
-  return raw.trim() === '' ? 'the value is empty' : undefined
+const DISPLAY_UNITS: Readonly<Record<QuantityKind, string>> = {
+  length: 'nm',
+  angle: 'deg',
+  share: '%',
+  number: '',
+  illuminance: 'lx',
+  luminance: 'cd/m2',
+  temperature: 'K',
 }
 
-function unitHint(unit: string, kind: QuantityKind): string {
-  const other = (Object.keys(TABLES) as QuantityKind[]).find(
-    (name) => name !== kind && Object.hasOwn(TABLES[name].units, unit),
-  )
-  return other === undefined ? `"${unit}" is not a unit known here` : `"${unit}" is a unit of ${other}`
-}
-
-/** Unit in which a kind is shown, and the factor from the internal value. */
-const DISPLAY: Readonly<Record<QuantityKind, { readonly unit: string; readonly of: (value: number) => number }>> = {
-  length: { unit: 'nm', of: same },
-  angle: { unit: 'deg', of: (rad) => (rad * 180) / Math.PI },
-  share: { unit: '%', of: scale(100) },
-  number: { unit: '', of: same },
-  illuminance: { unit: 'lx', of: same },
-  luminance: { unit: 'cd/m2', of: same },
-  temperature: { unit: 'K', of: same },
-}
-
+/** Unit in which a kind is shown; empty for a plain number. */
 export function displayUnit(kind: QuantityKind): string {
-  return DISPLAY[kind].unit
+  return DISPLAY_UNITS[kind]
 }
 
 /** Internal value in the unit it is shown in, without the rounding noise of the conversion. */
 export function toDisplay(value: number, kind: QuantityKind): number {
-  return kind === 'angle' || kind === 'share' ? Number(DISPLAY[kind].of(value).toPrecision(14)) : value
+  if (kind === 'angle') return Number(((value * 180) / Math.PI).toPrecision(14))
+  return kind === 'share' ? Number(timesTenTo(2)(String(value)).toPrecision(14)) : value
+}
+
+/** The inverse of `toDisplay`. */
+export function fromDisplay(shown: number, kind: QuantityKind): number {
+  return UNIT_TABLES[kind].units[displayUnit(kind)](String(shown))
 }
 
 /** `138 nm`, `45 deg`, `43.2 %`: with `digits` significant digits, or as many as the value needs. */
 export function formatQuantity(value: number, kind: QuantityKind, digits?: number): string {
   const shown = toDisplay(value, kind)
   const number = digits === undefined ? String(shown) : String(Number(shown.toPrecision(digits)))
-  const { unit } = DISPLAY[kind]
+  const unit = displayUnit(kind)
   return unit === '' ? number : `${number} ${unit}`
 }
 

@@ -16,7 +16,7 @@ export interface WeightedView extends Direction {
 }
 
 /** Half the step of the layers' own central differences: small against a wavelength, a turn, a share. */
-const STEPS: Readonly<Record<QuantityKind, number>> = {
+export const DIFFERENCE_STEPS: Readonly<Record<QuantityKind, number>> = {
   length: 0.01,
   angle: 1e-5,
   share: 1e-6,
@@ -41,7 +41,7 @@ export function createGradientExperiment(
   const withParameters = compileParameters(stack, paths)
   const parameters = paths.map((path) => ({
     set: compileSetter(stack, path),
-    step: STEPS[findParameter(stack, path)?.kind ?? 'number'],
+    step: DIFFERENCE_STEPS[findParameter(stack, path)?.kind ?? 'number'],
   }))
   const sensitivities = new Map<Solver, Sensitivity>()
   const change = new Float64Array(scene.wavelengthsNm.length)

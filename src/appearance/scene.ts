@@ -9,9 +9,9 @@ import { illuminantAt } from '../color/illuminant.js'
 import { type ColorWeights, createColorWeights } from '../color/weights.js'
 import { type Front, Solver } from '../optics/solver.js'
 import type { Direction, Stack } from '../stack/stack.js'
+import { wavelengthsOf } from '../stack/wavelengths.js'
 import { emissionStokesAt } from './emissionStokes.js'
 import { OpticalStack } from './opticalStack.js'
-import { wavelengthsOf } from '../stack/wavelengths.js'
 
 /** What the eye gets from one direction; fractions. Spectra are views that hold until the scene looks from there again. */
 export interface Look extends Direction {

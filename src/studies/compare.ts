@@ -9,11 +9,11 @@
  * others surely reach cannot be among the best and is not searched further. The others are searched in full from there.
  */
 
-import { wavelengthsOf } from '../appearance/wavelengths.js'
 import { globalSearch } from '../search/globalSearch.js'
 import { runSearchJob, searchInline } from '../search/searchJob.js'
 import { findParameter, getParameter, setParameters } from '../stack/parameters.js'
 import type { FilmCard, MetricName, OptimizeQuestion, Stack } from '../stack/stack.js'
+import { wavelengthsOf } from '../stack/wavelengths.js'
 import { toPlain } from '../units/quantity.js'
 import { allChoices, type Choice, cardsOf, questionWithin, type Slots, slotsOf, stackOf } from './candidate.js'
 import { coarseWavelengths, designProblem, designVariables } from './designProblem.js'

@@ -2,11 +2,11 @@
 import { createExperiment } from '../appearance/experiment.js'
 import { createGradientExperiment } from '../appearance/gradientExperiment.js'
 import { isSpectral } from '../appearance/metricWeights.js'
-import { wavelengthsOf } from '../stack/wavelengths.js'
 import type { SearchProblem } from '../search/problem.js'
 import type { Variable } from '../search/variables.js'
 import { findParameter } from '../stack/parameters.js'
 import type { MetricRequest, Objective, OptimizeQuestion, Range, Stack } from '../stack/stack.js'
+import { wavelengthsOf } from '../stack/wavelengths.js'
 import { limitMargin } from './evaluate.js'
 
 /** Wavelengths kept for choosing starts: enough to rank them, a quarter of the work. */
@@ -19,7 +19,7 @@ export function coarseWavelengths(wavelengths: Float64Array): Float64Array {
   return wavelengths.filter((_, i) => i % stride === 0)
 }
 
-export function designVariables(stack: Stack, { vary }: OptimizeQuestion): Variable[] {
+export function designVariables(stack: Stack, { vary }: Pick<OptimizeQuestion, 'vary'>): Variable[] {
   return Object.entries(vary).map(([path, range]) => variableOf(stack, path, range))
 }
 

@@ -1,0 +1,168 @@
+/**
+ * Which layer went wrong: the parameters of a measured sample, how surely they are known, what the measurement cannot tell
+ * apart, and which single fault would explain it best.
+ */
+import { createSpectrumExperiment } from '../appearance/spectrumExperiment.js'
+import { fitFromStarts, type StartsResult } from '../search/fitFromStarts.js'
+import type { ResidualProblem } from '../search/residualProblem.js'
+import { findParameter, getParameter, setParameters } from '../stack/parameters.js'
+import type { Direction, FitQuestion, Stack } from '../stack/stack.js'
+import { type QuantityKind, toPlain } from '../units/quantity.js'
+import { designVariables } from './designProblem.js'
+import { degrees } from './evaluate.js'
+import type { Hooks } from './hooks.js'
+import { type SingleFault, singleFaults } from './singleFaults.js'
+import { type Unresolved, unresolvedCombinations } from './unresolved.js'
+
+/** Measured spectra; fractions, rad. */
+export interface Measured {
+  readonly directions: readonly MeasuredSpectrum[]
+}
+
+export interface MeasuredSpectrum extends Direction {
+  readonly wavelengthNm: readonly number[]
+  readonly reflectance: readonly number[]
+}
+
+export interface FitSettings {
+  readonly seed: number
+  /** Starts besides the file's values; default 8. */
+  readonly starts?: number
+}
+
+/** Parameters in nm, degrees, fractions. */
+export interface Fit {
+  readonly title: string
+  readonly parameters: Readonly<Record<string, FittedParameter>>
+  /** Root mean square of measured less model, a reflectance. */
+  readonly residual_rms: number
+  /** Standard deviation of one reading the errors rest on: stated in the file, or estimated from the residuals. */
+  readonly noise: number
+  readonly noise_is_stated: boolean
+  readonly correlation: { readonly parameters: readonly string[]; readonly matrix: readonly (readonly number[])[] }
+  readonly unresolved: readonly Unresolved[]
+  readonly single_faults: readonly SingleFault[]
+  readonly directions: readonly FittedDirection[]
+  /** Other sets of parameters that explain the sample nearly as well. */
+  readonly solutions: readonly {
+    readonly parameters: Readonly<Record<string, number>>
+    readonly residual_rms: number
+  }[]
+  readonly evaluations: number
+  readonly reason: StartsResult['reason']
+  readonly interrupted: boolean
+}
+
+export interface FittedParameter {
+  readonly value: number
+  /** One standard deviation; null where the data hold the parameter at a bound. */
+  readonly std_error: number | null
+  /** What the stack file says. */
+  readonly nominal: number
+}
+
+export interface FittedDirection {
+  readonly theta_deg: number
+  readonly phi_deg: number
+  readonly wavelength_nm: readonly number[]
+  readonly measured: readonly number[]
+  readonly model: readonly number[]
+}
+
+/** The stack must ask the question: `stack.fit` present. */
+export function fit(stack: Stack, measured: Measured, settings: FitSettings, hooks: Hooks = {}): Fit {
+  const question = stack.fit
+  if (question === undefined) throw new Error('the stack has no fit question')
+  const paths = Object.keys(question.vary)
+  const kinds = paths.map((path) => findParameter(stack, path)?.kind ?? 'number')
+  const problem = fitProblem(stack, measured, question)
+  const nominal = paths.map((path) => getParameter(stack, path))
+  const found = fitFromStarts(problem, {
+    start: nominal,
+    seed: settings.seed,
+    starts: settings.starts,
+    stopped: hooks.stopped,
+  })
+  hooks.progress?.(0.6)
+  const { certainty } = found
+  const scale = question.noise ?? 1
+  const rms = (value: number) => Math.sqrt((2 * value) / problem.count) * scale
+  return {
+    title: stack.title,
+    parameters: Object.fromEntries(
+      paths.map((path, k) => [path, fittedParameter(found.x[k], certainty.standardErrors[k], nominal[k], kinds[k])]),
+    ),
+    residual_rms: rms(found.value),
+    noise: question.noise ?? certainty.residualDeviation,
+    noise_is_stated: question.noise !== undefined,
+    correlation: correlationOf(paths, certainty.free, certainty.correlation),
+    unresolved: unresolvedCombinations(paths, certainty, measured.directions),
+    single_faults: singleFaults(stack, measured, question, hooks),
+    directions: fittedDirections(
+      setParameters(stack, Object.fromEntries(paths.map((path, k) => [path, found.x[k]]))),
+      measured,
+    ),
+    solutions: found.solutions.slice(1).map(({ x, value }) => ({
+      parameters: Object.fromEntries(paths.map((path, k) => [path, toPlain(x[k], kinds[k])])),
+      residual_rms: rms(value),
+    })),
+    evaluations: found.evaluations,
+    reason: found.reason,
+    interrupted: found.reason === 'stopped',
+  }
+}
+
+/** Measured less model over the noise, where that is stated. */
+export function fitProblem(stack: Stack, measured: Measured, question: FitQuestion): ResidualProblem {
+  const paths = Object.keys(question.vary)
+  const experiment = createSpectrumExperiment(stack, paths, measured.directions)
+  const target = measured.directions.flatMap(({ reflectance }) => [...reflectance])
+  const scale = 1 / (question.noise ?? 1)
+  return {
+    variables: designVariables(stack, question),
+    count: experiment.count,
+    noiseIsKnown: question.noise !== undefined,
+    residuals: (x, out) => {
+      experiment.reflectance(x, out)
+      for (let i = 0; i < out.length; i++) out[i] = (out[i] - target[i]) * scale
+    },
+    jacobian: (x, out) => {
+      experiment.jacobian(x, out)
+      for (let i = 0; i < out.length; i++) out[i] *= scale
+    },
+  }
+}
+
+function fittedParameter(value: number, error: number, nominal: number, kind: QuantityKind): FittedParameter {
+  return {
+    value: toPlain(value, kind),
+    std_error: Number.isNaN(error) ? null : toPlain(error, kind),
+    nominal: toPlain(nominal, kind),
+  }
+}
+
+function correlationOf(paths: readonly string[], free: readonly number[], flat: Float64Array): Fit['correlation'] {
+  const p = free.length
+  return {
+    parameters: free.map((i) => paths[i]),
+    matrix: free.map((_, a) => Array.from(flat.subarray(a * p, (a + 1) * p))),
+  }
+}
+
+function fittedDirections(stack: Stack, { directions }: Measured): FittedDirection[] {
+  const experiment = createSpectrumExperiment(stack, [], directions)
+  const model = new Float64Array(experiment.count)
+  experiment.reflectance(new Float64Array(0), model)
+  let offset = 0
+  return directions.map(({ theta, phi, wavelengthNm, reflectance }) => {
+    const part = model.subarray(offset, offset + wavelengthNm.length)
+    offset += wavelengthNm.length
+    return {
+      theta_deg: degrees(theta),
+      phi_deg: degrees(phi),
+      wavelength_nm: wavelengthNm,
+      measured: reflectance,
+      model: Array.from(part),
+    }
+  })
+}

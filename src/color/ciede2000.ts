@@ -7,6 +7,7 @@ type Triple = readonly [number, number, number]
 const RADIANS = Math.PI / 180
 const POWER_25_7 = 25 ** 7
 
+/** ΔE00 of two colors in L*, a*, b*. */
 export function ciede2000([l1, a1, b1]: Triple, [l2, a2, b2]: Triple): number {
   const meanChroma7 = ((Math.hypot(a1, b1) + Math.hypot(a2, b2)) / 2) ** 7
   const g = (1 - Math.sqrt(meanChroma7 / (meanChroma7 + POWER_25_7))) / 2
@@ -14,7 +15,7 @@ export function ciede2000([l1, a1, b1]: Triple, [l2, a2, b2]: Triple): number {
   const [c1, c2] = [Math.hypot(p1, b1), Math.hypot(p2, b2)]
   const [h1, h2] = [hueDegrees(p1, b1), hueDegrees(p2, b2)]
   const gray = c1 * c2 === 0
-  const dHue = gray ? 0 : ((h2 - h1 + 540) % 360) - 180
+  const dHue = gray ? 0 : withinHalfTurn(h2 - h1)
   const dH = 2 * Math.sqrt(c1 * c2) * Math.sin((dHue / 2) * RADIANS)
   const hue = gray ? h1 + h2 : meanHueDegrees(h1, h2)
   const t =
@@ -37,6 +38,12 @@ function hueDegrees(a: number, b: number): number {
   if (a === 0 && b === 0) return 0
   const hue = Math.atan2(b, a) / RADIANS
   return hue < 0 ? hue + 360 : hue
+}
+
+/** -180 to 180, both ends kept as they come. */
+function withinHalfTurn(degrees: number): number {
+  if (degrees > 180) return degrees - 360
+  return degrees < -180 ? degrees + 360 : degrees
 }
 
 function meanHueDegrees(h1: number, h2: number): number {

@@ -7,7 +7,7 @@ export const DAYLIGHT_KELVIN = { from: 4000, to: 25000 } as const
 /**
  * Relative spectral power of daylight of a correlated color temperature, S = S0 + M1 S1 + M2 S2 with M1 and M2 rounded to
  * three decimals (CIE 15). `cct` in K, 4000 to 25000. For the named phases multiply nominal temperatures by 1.4388/1.4380
- * (D65: 6504 K).
+ * (D65: 6504 K). Throws RangeError outside the locus.
  */
 export function daylightSpectrum(cct: number, wavelengthsNm: Float64Array): Float64Array {
   const { x, y } = daylightChromaticity(cct)
@@ -22,8 +22,10 @@ export function daylightSpectrum(cct: number, wavelengthsNm: Float64Array): Floa
   )
 }
 
-/** The daylight locus of CIE 15. */
+/** Chromaticity on the daylight locus of CIE 15; throws RangeError outside 4000 to 25000 K. */
 export function daylightChromaticity(cct: number): { x: number; y: number } {
+  const { from, to } = DAYLIGHT_KELVIN
+  if (!(cct >= from && cct <= to)) throw new RangeError(`Daylight is defined from ${from} to ${to} K, not at ${cct} K`)
   const t = 1000 / cct
   const x =
     cct <= 7000

@@ -10,11 +10,14 @@ import { illuminantLEDB5 } from './tables/illuminantLEDB5.js'
 
 export type IlluminantName = 'D65' | 'D50' | 'A' | 'E' | 'FL2' | 'FL11' | 'LED-B3' | 'LED-B5'
 
+/** Relative spectral power of a lamp, wavelengths ascending. */
+export interface Lamp {
+  readonly wavelength_nm: readonly number[]
+  readonly value: readonly number[]
+}
+
 /** A standard illuminant, daylight of a correlated color temperature in K (4000 to 25000), or a lamp as a table. */
-export type Illuminant =
-  | IlluminantName
-  | { readonly cct: number }
-  | { readonly wavelength_nm: readonly number[]; readonly value: readonly number[] }
+export type Illuminant = IlluminantName | { readonly cct: number } | Lamp
 
 interface PowerTable {
   readonly fromNm: number
@@ -33,8 +36,9 @@ const TABLES: Readonly<Record<Exclude<IlluminantName, 'E'>, PowerTable>> = {
 }
 
 /**
- * Relative spectral power at the wavelengths. Tables are interpolated linearly and held constant beyond their ends, where
- * the color-matching functions are next to nothing.
+ * Relative spectral power at the wavelengths, in the scale of the table (100 at 560 nm for the CIE ones but the lamps FL
+ * and LED). Tables are interpolated linearly, as CIE 15 has it for illuminants, and held at their nearest value beyond their
+ * ends (300 or 380, 780 or 830 nm), as it advises for missing data. Throws RangeError for daylight outside its locus.
  */
 export function illuminantAt(illuminant: Illuminant, wavelengthsNm: Float64Array): Float64Array {
   if (illuminant === 'E') return new Float64Array(wavelengthsNm.length).fill(100)

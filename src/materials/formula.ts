@@ -1,69 +1,41 @@
 /**
- * Expressions in stack files and links, such as `1.5 + 4500 / wavelength_nm^2`. mathjs parses them; of its syntax tree only
- * numbers, the variables offered, + - * / ^ and a few functions are let through, and a closure of our own evaluates what is
- * left: no import, no assignment, no object or array, no function definition, no unit.
+ * Expressions in stack files and links, such as `1.5 + 4500 / wavelength_nm^2` or `half.slow_axis + 45`: + - * / ^ (which
+ * binds to the right and before a sign: -2^2 = -4), numbers, a few functions and the variables offered, nothing else.
+ * `formulaTokens` lets through only known names and signs, mathjs parses, `formulaClosure` evaluates.
  */
-
-/** Longest expression read, characters, and deepest nesting of brackets: far beyond any dispersion formula. */
-export const FORMULA_LIMITS = { length: 500, depth: 40 } as const
+import { closureOf, type Evaluate } from './formulaClosure.js'
+import { FormulaError, type FormulaToken, readTokens } from './formulaTokens.js'
+import { allowedIn } from './formulaVocabulary.js'
 
 export interface FormulaFault {
   readonly message: string
-  /** 1-based column in the expression, where known. */
-  readonly column?: number
+  /** 1-based column in the expression. */
+  readonly column: number
   readonly allowed: string
-}
-
-type Evaluate = (values: Readonly<Record<string, number>>) => number
-
-const FUNCTIONS: Readonly<Record<string, (...args: number[]) => number>> = {
-  sqrt: Math.sqrt,
-  exp: Math.exp,
-  log: Math.log,
-  log10: Math.log10,
-  sin: Math.sin,
-  cos: Math.cos,
-  tan: Math.tan,
-  atan: Math.atan,
-  abs: Math.abs,
-  pow: Math.pow,
-  min: Math.min,
-  max: Math.max,
-}
-
-const ARGUMENTS: Readonly<Record<string, readonly [number, number]>> = { pow: [2, 2], min: [1, 8], max: [1, 8] }
-
-const CONSTANTS: Readonly<Record<string, number>> = { pi: Math.PI, e: Math.E }
-
-const OPERATORS: Readonly<Record<string, (a: number, b: number) => number>> = {
-  add: (a, b) => a + b,
-  subtract: (a, b) => a - b,
-  multiply: (a, b) => a * b,
-  divide: (a, b) => a / b,
-  pow: (a, b) => a ** b,
 }
 
 /** Variables of a formula for a refractive index. */
 export const INDEX_VARIABLES = ['wavelength_nm', 'wavelength_um'] as const
 
+/** Compiled formulas of this thread; a worker prepares its own. */
 const prepared = new Map<string, Evaluate>()
 
-/** Compiles an expression so that `formulaAt` can be used; the fault says what is not let through. Names may hold dots. */
+/**
+ * Compiles an expression so that `formulaAt` can be used, or tells what is wrong with it. A variable's name may be a
+ * parameter path with dots. The parser is loaded at the first formula.
+ */
 export async function prepareFormula(
   text: string,
   variables: readonly string[] = INDEX_VARIABLES,
 ): Promise<FormulaFault | undefined> {
-  if (prepared.has(keyOf(text, variables))) return undefined
-  const allowed = `numbers, ${variables.join(', ')}, pi, e, + - * / ^ and ${Object.keys(FUNCTIONS).join(', ')}`
-  const tooMuch = exceedsLimits(text)
-  if (tooMuch !== undefined) return { message: tooMuch, allowed }
-  const { parse } = await import('mathjs/number')
   try {
-    const { plain, names } = hideDots(text, variables)
-    prepared.set(keyOf(text, variables), compile(parse(plain) as unknown as Node, names))
+    const tokens = readTokens(text, variables)
+    const key = keyOf(text, variables)
+    if (!prepared.has(key)) prepared.set(key, await compile(tokens, variables))
     return undefined
   } catch (error) {
-    return { message: faultMessage(error), ...columnOf(error), allowed }
+    if (!(error instanceof FormulaError)) throw error
+    return { message: error.message, column: error.column, allowed: allowedIn(variables) }
   }
 }
 
@@ -82,112 +54,28 @@ function keyOf(text: string, variables: readonly string[]): string {
   return `${variables.join(' ')}\n${text}`
 }
 
-function exceedsLimits(text: string): string | undefined {
-  if (text.length > FORMULA_LIMITS.length) {
-    return `the formula has ${text.length} characters; ${FORMULA_LIMITS.length} are allowed`
+/** Variables go to the parser as v0, v1, …: a path with dots would be property access to it. */
+async function compile(tokens: readonly FormulaToken[], variables: readonly string[]): Promise<Evaluate> {
+  const words = tokens.map(({ kind, text }) => (kind === 'variable' ? `v${variables.indexOf(text)}` : text))
+  const { parse } = await import('mathjs/number')
+  try {
+    return closureOf(parse(words.join(' ')), new Map(variables.map((name, i) => [`v${i}`, name])))
+  } catch (error) {
+    throw located(error, tokens, words)
   }
-  let depth = 0
-  for (const character of text) {
-    if ('([{'.includes(character)) depth++
-    if (')]}'.includes(character)) depth--
-    if (depth > FORMULA_LIMITS.depth) return `the formula nests brackets deeper than ${FORMULA_LIMITS.depth}`
-  }
-  return undefined
 }
 
-/** Paths such as `half.slow_axis` are single names to us, but property access to the parser. */
-function hideDots(text: string, variables: readonly string[]): { plain: string; names: ReadonlyMap<string, string> } {
-  const names = new Map(variables.filter((name) => !name.includes('.')).map((name) => [name, name]))
-  const plain = text.replace(/(?<![\w.])[A-Za-z_]\w*(?:\.\w+)+/g, (path) => {
-    const index = variables.indexOf(path)
-    if (index < 0) throw new NotAllowed(`"${path}" is not a known name`)
-    const alias = `path_${index}`.padEnd(path.length, '_')
-    names.set(alias, path)
-    return alias
+/** The parser tells a 1-based place in the words joined by blanks; the user wants it in the text. */
+function located(error: unknown, tokens: readonly FormulaToken[], words: readonly string[]): FormulaError {
+  const { message } = error as Error
+  const last = tokens[tokens.length - 1]
+  if (!(error instanceof SyntaxError && 'char' in error)) return new FormulaError(message, tokens[0].column)
+  let end = 0
+  const at = words.findIndex((word) => {
+    end += word.length + 1
+    return end >= Number(error.char)
   })
-  return { plain, names }
-}
-
-/** The part of mathjs's syntax tree that is let through. */
-interface Node {
-  readonly type: string
-  readonly value?: unknown
-  readonly name?: string
-  readonly fn?: unknown
-  readonly args?: readonly Node[]
-  readonly content?: Node
-}
-
-class NotAllowed extends Error {}
-
-function compile(node: Node, names: ReadonlyMap<string, string>): Evaluate {
-  switch (node.type) {
-    case 'ConstantNode':
-      return constant(node.value)
-    case 'ParenthesisNode':
-      return compile(node.content as Node, names)
-    case 'SymbolNode':
-      return symbol(node.name as string, names)
-    case 'OperatorNode':
-      return operator(node, names)
-    case 'FunctionNode':
-      return call(node, names)
-    default:
-      throw new NotAllowed(`${describeNode(node.type)} is not allowed in a formula`)
-  }
-}
-
-function constant(value: unknown): Evaluate {
-  if (typeof value !== 'number') throw new NotAllowed(`${JSON.stringify(value)} is not a number`)
-  return () => value
-}
-
-function symbol(name: string, names: ReadonlyMap<string, string>): Evaluate {
-  const variable = names.get(name)
-  if (variable !== undefined) return (values) => values[variable]
-  if (!Object.hasOwn(CONSTANTS, name)) throw new NotAllowed(`"${name}" is not a known name`)
-  const value = CONSTANTS[name]
-  return () => value
-}
-
-function operator(node: Node, names: ReadonlyMap<string, string>): Evaluate {
-  const args = (node.args ?? []).map((arg) => compile(arg, names))
-  if (node.fn === 'unaryMinus') return (values) => -args[0](values)
-  if (node.fn === 'unaryPlus') return args[0]
-  const apply = Object.hasOwn(OPERATORS, String(node.fn)) ? OPERATORS[String(node.fn)] : undefined
-  if (apply === undefined) throw new NotAllowed(`the operator "${String(node.fn)}" is not allowed in a formula`)
-  // The parser joins a + b + c into one node of three.
-  return (values) => args.slice(1).reduce((sum, arg) => apply(sum, arg(values)), args[0](values))
-}
-
-function call(node: Node, names: ReadonlyMap<string, string>): Evaluate {
-  const fn = node.fn as Node
-  const name = fn.type === 'SymbolNode' ? String(fn.name) : ''
-  if (!Object.hasOwn(FUNCTIONS, name)) throw new NotAllowed(`the function "${name}" is not allowed in a formula`)
-  const args = (node.args ?? []).map((arg) => compile(arg, names))
-  const [least, most] = ARGUMENTS[name] ?? [1, 1]
-  if (args.length < least || args.length > most) {
-    throw new NotAllowed(
-      `the function "${name}" takes ${least === most ? least : `${least} to ${most}`} arguments, not ${args.length}`,
-    )
-  }
-  const apply = FUNCTIONS[name]
-  return (values) => apply(...args.map((arg) => arg(values)))
-}
-
-function describeNode(type: string): string {
-  return type
-    .replace(/Node$/, '')
-    .replace(/([a-z])([A-Z])/g, '$1 $2')
-    .toLowerCase()
-}
-
-function faultMessage(error: unknown): string {
-  if (error instanceof NotAllowed) return error.message
-  return error instanceof Error ? `cannot be read as a formula: ${error.message}` : 'cannot be read as a formula'
-}
-
-function columnOf(error: unknown): { column?: number } {
-  const at = typeof error === 'object' && error !== null && 'char' in error ? Number(error.char) : Number.NaN
-  return Number.isFinite(at) ? { column: at } : {}
+  const column = at < 0 ? last.column + last.text.length : tokens[at].column
+  const reason = message.replace(/ \(char \d+\)$/, '')
+  return new FormulaError(`cannot be read as a formula: ${reason[0].toLowerCase()}${reason.slice(1)}`, column)
 }

@@ -1,51 +1,50 @@
-/** A published material as its file states it; wavelengths nm in tables, µm in formulas. */
-export type PublishedMaterial = PublishedBase &
-  (TableLaw | SellmeierLaw | SingleResonanceLaw | CauchyLaw | LorentzDrudeLaw)
+/** A published material: where its figures come from, where they hold, and the law that gives n + ik over wavelength. */
+export type PublishedMaterial = Provenance & DispersionLaw
 
-interface PublishedBase {
-  readonly material: string
-  readonly range_nm: readonly number[]
+export interface Provenance {
+  readonly title: string
   readonly source: string
+  /** Who gathered the figures, and on what terms. */
   readonly via: string
   readonly note?: string
-  /** Extinction beside a formula for n: rows of [nm, k], or one value. */
-  readonly k_table?: readonly (readonly number[])[]
-  readonly k_const?: number
+  /** Where both n and k hold, nm. */
+  readonly rangeNm: readonly [from: number, to: number]
 }
 
-interface TableLaw {
+export type DispersionLaw = TableLaw | SellmeierLaw | CauchyLaw | LorentzDrudeLaw
+
+/** Linear between the rows, constant outside. k is null where the source gives none: the nearest value given is held. */
+export interface TableLaw {
   readonly kind: 'table'
-  /** [nm, n, k]; k may be missing where the source gives none. */
-  readonly rows: readonly (readonly (number | null)[])[]
+  readonly rows: readonly (readonly [nm: number, n: number, k: number | null])[]
 }
 
-/** n² = 1 + A + Σ B L²/(L² - c), L in µm. */
-interface SellmeierLaw {
+/** n² = 1 + constant + Σ b L²/(L² - c), L in µm; c is the square of a resonance, or the resonance itself where `resonance` says 'um'. */
+export interface SellmeierLaw extends Extinction {
   readonly kind: 'sellmeier'
-  readonly A: number
-  readonly C_is: string
-  readonly terms: readonly (readonly number[])[]
+  readonly constant: number
+  readonly resonance: 'um' | 'um2'
+  readonly terms: readonly (readonly [b: number, c: number])[]
 }
 
-/** n² = P + Q/(L² - R), L in µm. */
-interface SingleResonanceLaw {
-  readonly kind: 'sellmeier'
-  readonly P: number
-  readonly Q: number
-  readonly R: number
-}
-
-/** n = Σ a L^p, L in µm; terms [a, p]. */
-interface CauchyLaw {
+/** n = Σ a L^power, L in µm. */
+export interface CauchyLaw extends Extinction {
   readonly kind: 'cauchy'
-  readonly terms: readonly (readonly number[])[]
+  readonly terms: readonly (readonly [a: number, power: number])[]
 }
 
-/** ε(E) = 1 - f0 ωp²/(E (E + i γ0)) + Σ f ωp²/(ω² - E² - i E γ), E in eV; n + ik = √ε. */
-interface LorentzDrudeLaw {
+interface Extinction {
+  /** k beside a formula for n, linear between the rows and constant outside; transparent where absent. */
+  readonly kRows?: readonly (readonly [nm: number, k: number])[]
+}
+
+/**
+ * ε(E) = 1 - f₀ωp²/(E(E + iγ₀)) + Σ fωp²/(ω² - E² - iEγ), all energies in eV; n + ik = √ε. Equations 1 to 5 of
+ * A. D. Rakic et al., Appl. Opt. 37, 5271-5283 (1998), in the sign convention of k ≥ 0.
+ */
+export interface LorentzDrudeLaw {
   readonly kind: 'lorentz-drude'
-  readonly omega_p_eV: number
-  readonly f0: number
-  readonly gamma0_eV: number
-  readonly oscillators_f_gamma_omega_eV: readonly (readonly number[])[]
+  readonly plasmaEv: number
+  readonly drude: readonly [f0: number, gamma0Ev: number]
+  readonly oscillators: readonly (readonly [f: number, gammaEv: number, omegaEv: number])[]
 }

@@ -1,92 +1,98 @@
-import ag from './published/ag.json'
-import agjohnson from './published/ag_johnson.json'
-import al from './published/al.json'
-import allorentzdrude from './published/al_lorentz_drude.json'
-import calcitene from './published/calcite_ne.json'
-import calciteno from './published/calcite_no.json'
-import cr from './published/cr.json'
-import cu from './published/cu.json'
-import cycloolefin from './published/cyclo_olefin.json'
-import fusedsilica from './published/fused_silica.json'
-import glass from './published/glass.json'
-import glasscrown from './published/glass_crown.json'
-import ito from './published/ito.json'
-import itothin from './published/ito_thin.json'
-import lc5cbne from './published/lc_5cb_ne.json'
-import lc5cbno from './published/lc_5cb_no.json'
-import lccyanobiphenylne from './published/lc_cyanobiphenyl_ne.json'
-import lccyanobiphenylno from './published/lc_cyanobiphenyl_no.json'
-import lcnegativene from './published/lc_negative_ne.json'
-import lcnegativeno from './published/lc_negative_no.json'
-import mg from './published/mg.json'
-import mgf2 from './published/mgf2.json'
-import mgf2crystalne from './published/mgf2_crystal_ne.json'
-import mgf2crystalno from './published/mgf2_crystal_no.json'
-import mo from './published/mo.json'
-import nb2o5 from './published/nb2o5.json'
-import pet from './published/pet.json'
-import pmma from './published/pmma.json'
-import polycarbonate from './published/polycarbonate.json'
-import polyimide from './published/polyimide.json'
-import pva from './published/pva.json'
-import quartzne from './published/quartz_ne.json'
-import quartzno from './published/quartz_no.json'
-import si3n4 from './published/si3n4.json'
-import silicon from './published/silicon.json'
-import siliconamorphous from './published/silicon_amorphous.json'
-import sio2 from './published/sio2.json'
-import tac from './published/tac.json'
-import ti from './published/ti.json'
-import tio2 from './published/tio2.json'
-import tio2rutileno from './published/tio2_rutile_no.json'
-import water from './published/water.json'
+import { ag } from './published/ag.js'
+import { agJohnson } from './published/agJohnson.js'
+import { agLorentzDrude } from './published/agLorentzDrude.js'
+import { al } from './published/al.js'
+import { alLorentzDrude } from './published/alLorentzDrude.js'
+import { alMathewson } from './published/alMathewson.js'
+import { calciteNe } from './published/calciteNe.js'
+import { calciteNo } from './published/calciteNo.js'
+import { cr } from './published/cr.js'
+import { crLorentzDrude } from './published/crLorentzDrude.js'
+import { cu } from './published/cu.js'
+import { cycloOlefin } from './published/cycloOlefin.js'
+import { fusedSilica } from './published/fusedSilica.js'
+import { glass } from './published/glass.js'
+import { glassBk } from './published/glassBk.js'
+import { ito } from './published/ito.js'
+import { itoThin } from './published/itoThin.js'
+import { lc5cbNe } from './published/lc5cbNe.js'
+import { lc5cbNo } from './published/lc5cbNo.js'
+import { lcCyanobiphenylNe } from './published/lcCyanobiphenylNe.js'
+import { lcCyanobiphenylNo } from './published/lcCyanobiphenylNo.js'
+import { lcNegativeNe } from './published/lcNegativeNe.js'
+import { lcNegativeNo } from './published/lcNegativeNo.js'
+import { mg } from './published/mg.js'
+import { mgf2 } from './published/mgf2.js'
+import { mgf2CrystalNe } from './published/mgf2CrystalNe.js'
+import { mgf2CrystalNo } from './published/mgf2CrystalNo.js'
+import { mo } from './published/mo.js'
+import { nb2o5 } from './published/nb2o5.js'
+import { pet } from './published/pet.js'
+import { pmma } from './published/pmma.js'
+import { polycarbonate } from './published/polycarbonate.js'
+import { polyimide } from './published/polyimide.js'
+import { pva } from './published/pva.js'
+import { quartzNe } from './published/quartzNe.js'
+import { quartzNo } from './published/quartzNo.js'
+import { si3n4 } from './published/si3n4.js'
+import { silicon } from './published/silicon.js'
+import { siliconAmorphous } from './published/siliconAmorphous.js'
+import { sio2Film } from './published/sio2Film.js'
+import { tac } from './published/tac.js'
+import { ti } from './published/ti.js'
+import { tiLorentzDrude } from './published/tiLorentzDrude.js'
+import { tio2 } from './published/tio2.js'
+import { water } from './published/water.js'
 import type { PublishedMaterial } from './publishedMaterial.js'
 
 /**
- * Published coefficients by the name a stack file uses. Numbers were gathered by M. N. Polyanskiy's refractive-index
- * database (CC0); each file names its source and valid range.
+ * Published figures by the name a stack file uses. The bare name of a metal is the best table over 380 to 780 nm; another source
+ * of the same metal carries its first author or its model. Each file names its source, terms and valid range.
  */
 export const PUBLISHED: Readonly<Record<string, PublishedMaterial>> = {
-  ag: ag as PublishedMaterial,
-  ag_johnson: agjohnson as PublishedMaterial,
-  al: al as PublishedMaterial,
-  al_lorentz_drude: allorentzdrude as PublishedMaterial,
-  calcite_ne: calcitene as PublishedMaterial,
-  calcite_no: calciteno as PublishedMaterial,
-  cr: cr as PublishedMaterial,
-  cu: cu as PublishedMaterial,
-  cyclo_olefin: cycloolefin as PublishedMaterial,
-  fused_silica: fusedsilica as PublishedMaterial,
-  glass: glass as PublishedMaterial,
-  glass_crown: glasscrown as PublishedMaterial,
-  ito: ito as PublishedMaterial,
-  ito_thin: itothin as PublishedMaterial,
-  lc_5cb_ne: lc5cbne as PublishedMaterial,
-  lc_5cb_no: lc5cbno as PublishedMaterial,
-  lc_cyanobiphenyl_ne: lccyanobiphenylne as PublishedMaterial,
-  lc_cyanobiphenyl_no: lccyanobiphenylno as PublishedMaterial,
-  lc_negative_ne: lcnegativene as PublishedMaterial,
-  lc_negative_no: lcnegativeno as PublishedMaterial,
-  mg: mg as PublishedMaterial,
-  mgf2: mgf2 as PublishedMaterial,
-  mgf2_crystal_ne: mgf2crystalne as PublishedMaterial,
-  mgf2_crystal_no: mgf2crystalno as PublishedMaterial,
-  mo: mo as PublishedMaterial,
-  nb2o5: nb2o5 as PublishedMaterial,
-  pet: pet as PublishedMaterial,
-  pmma: pmma as PublishedMaterial,
-  polycarbonate: polycarbonate as PublishedMaterial,
-  polyimide: polyimide as PublishedMaterial,
-  pva: pva as PublishedMaterial,
-  quartz_ne: quartzne as PublishedMaterial,
-  quartz_no: quartzno as PublishedMaterial,
-  si3n4: si3n4 as PublishedMaterial,
-  silicon: silicon as PublishedMaterial,
-  silicon_amorphous: siliconamorphous as PublishedMaterial,
-  sio2: sio2 as PublishedMaterial,
-  tac: tac as PublishedMaterial,
-  ti: ti as PublishedMaterial,
-  tio2: tio2 as PublishedMaterial,
-  tio2_rutile_no: tio2rutileno as PublishedMaterial,
-  water: water as PublishedMaterial,
+  ag,
+  ag_johnson: agJohnson,
+  ag_lorentz_drude: agLorentzDrude,
+  al,
+  al_mathewson: alMathewson,
+  al_lorentz_drude: alLorentzDrude,
+  calcite_ne: calciteNe,
+  calcite_no: calciteNo,
+  cr,
+  cr_lorentz_drude: crLorentzDrude,
+  cu,
+  cyclo_olefin: cycloOlefin,
+  fused_silica: fusedSilica,
+  glass,
+  glass_bk: glassBk,
+  ito,
+  ito_thin: itoThin,
+  lc_5cb_ne: lc5cbNe,
+  lc_5cb_no: lc5cbNo,
+  lc_cyanobiphenyl_ne: lcCyanobiphenylNe,
+  lc_cyanobiphenyl_no: lcCyanobiphenylNo,
+  lc_negative_ne: lcNegativeNe,
+  lc_negative_no: lcNegativeNo,
+  mg,
+  mgf2,
+  mgf2_crystal_ne: mgf2CrystalNe,
+  mgf2_crystal_no: mgf2CrystalNo,
+  mo,
+  nb2o5,
+  pet,
+  pmma,
+  polycarbonate,
+  polyimide,
+  pva,
+  quartz_ne: quartzNe,
+  quartz_no: quartzNo,
+  si3n4,
+  silicon,
+  silicon_amorphous: siliconAmorphous,
+  sio2_film: sio2Film,
+  tac,
+  ti,
+  ti_lorentz_drude: tiLorentzDrude,
+  tio2,
+  water,
 }

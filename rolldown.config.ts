@@ -23,16 +23,18 @@ const fonts: Plugin = {
 // Everything is bundled, so that `--help` loads one small file and each verb loads only what it needs.
 // Native and browser-driving packages stay outside: they carry files of their own.
 export default defineConfig({
-  input: { offblack: 'src/cli/main.ts', library: 'src/library.ts' },
+  input: { offblack: 'src/cli/main.ts', worker: 'src/cli/worker.ts', library: 'src/library.ts' },
   platform: 'node',
   external: ['@napi-rs/canvas', /^playwright-core/],
   resolve: { extensionAlias: { '.js': ['.ts', '.js'] } },
   plugins: [fonts],
   output: {
     dir: 'dist',
+    cleanDir: true,
     format: 'esm',
     entryFileNames: '[name].js',
-    chunkFileNames: 'chunks/[name]-[hash].js',
+    // Beside the entries, so that any of them finds worker.js next to itself.
+    chunkFileNames: '[name]-[hash].js',
     minify: false,
   },
 })

@@ -17,7 +17,7 @@ export function metricNumber(metric: MetricName, value: number): string {
 /** With its unit, e.g. `4.662 %`. */
 export function metricWithUnit(metric: MetricName, value: number): string {
   const { unit } = METRIC_QUANTITIES[metric]
-  return unit === '' ? metricNumber(metric, value) : `${metricNumber(metric, value)} ${unit}`
+  return unit === '' || Number.isNaN(value) ? metricNumber(metric, value) : `${metricNumber(metric, value)} ${unit}`
 }
 
 /** Three significant digits; large contrasts as whole numbers. */

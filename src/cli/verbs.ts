@@ -1,0 +1,67 @@
+/**
+ * The verbs: name, what it answers, options, an example that runs from the project's folder, and the module that does it,
+ * loaded only when asked for, so that `--help` is quick.
+ */
+import { Option } from 'commander'
+import type { VerbModule } from './context.js'
+import { wholeNumber } from './optionValues.js'
+
+export interface Verb {
+  readonly name: string
+  readonly summary: string
+  /** Takes a stack file, and with it the options that all such verbs share; `new` takes the file to be made. */
+  readonly file?: 'stack' | 'new'
+  readonly options?: readonly Option[]
+  /** Arguments of `offblack`. */
+  readonly example: string
+  readonly load: () => Promise<VerbModule<never>>
+}
+
+export const VERBS: readonly Verb[] = [
+  {
+    name: 'evaluate',
+    summary: 'how dark, how neutral, at what cost?',
+    file: 'stack',
+    example: 'evaluate stacks/dive-computer.stack.yaml --set quarter.retardance=138nm',
+    load: () => import('./verbs/evaluate.js'),
+  },
+  {
+    name: 'optimize',
+    summary: 'which angles and retardances make it darkest?',
+    file: 'stack',
+    options: [
+      new Option('--seed <number>', 'of the starts; the same seed gives the same digits')
+        .argParser(wholeNumber(0, 2 ** 31 - 1))
+        .default(1),
+    ],
+    example: 'optimize stacks/dive-computer.stack.yaml --out out',
+    load: () => import('./verbs/optimize.js'),
+  },
+  {
+    name: 'check',
+    summary: 'is the stack file right? All problems at once',
+    file: 'stack',
+    example: 'check stacks/dive-computer.stack.yaml',
+    load: () => import('./verbs/check.js'),
+  },
+  {
+    name: 'new',
+    summary: 'start a stack file, with comments',
+    file: 'new',
+    example: 'new my.stack.yaml',
+    load: () => import('./verbs/new.js'),
+  },
+  {
+    name: 'materials',
+    summary: 'the published materials, with range and source',
+    options: [new Option('--json', 'print JSON')],
+    example: 'materials',
+    load: () => import('./verbs/materials.js'),
+  },
+  {
+    name: 'schema',
+    summary: 'JSON Schema of the stack file, for editors',
+    example: 'schema > stack.schema.json',
+    load: () => import('./verbs/schema.js'),
+  },
+]

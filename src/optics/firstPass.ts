@@ -11,11 +11,14 @@ import type { Solver } from './solver.js'
 export interface FirstPass {
   /** At the lower side of each layer, the light going in; the last is what reaches the panel. */
   readonly down: readonly Float64Array[]
-  /** At the upper side of each layer, from the panel's side up; after them what leaves into air. */
+  /** What leaves the panel, at the upper side of each layer from there up, and what leaves into air. */
   readonly up: readonly Float64Array[]
 }
 
-/** Of unpolarized light of unit power per polarization pair in air, for the stack the solver saw last; mirror panels. */
+/**
+ * Of unpolarized light of unit power per polarization pair in air, for the stack the solver saw last. A mirror is reached in
+ * its immersion medium, a metal in the layer on it, whose face it reflects at.
+ */
 export function firstPass(solver: Solver): FirstPass {
   const n = solver.wavelengthsNm.length
   const { slots } = solver
@@ -24,18 +27,25 @@ export function firstPass(solver: Solver): FirstPass {
   let light: Float64Array = new Float64Array(4 * n)
   light.fill(c2 / 2, 0, n)
   light.fill(1 / 2, n, 2 * n)
+  const end = slots.length - 1
   const down: Float64Array[] = []
-  for (let k = 1; k < slots.length; k++) {
+  for (let k = 1; k < end; k++) {
     faceBetween(slots[k - 1].modes, slots[k].modes, face, n)
     light = mapped(face.t, light, n)
-    if (k < slots.length - 1) light = mapped(slots[k].modes.p, light, n)
+    light = mapped(slots[k].modes.p, light, n)
     down.push(light)
   }
-  light = returned(solver.levels[0].w, light, n)
-  const up: Float64Array[] = []
-  for (let k = slots.length - 2; k >= 0; k--) {
-    faceBetween(slots[k].modes, slots[k + 1].modes, face, n)
-    light = mapped(face.tUp, light, n)
+  faceBetween(slots[end - 1].modes, slots[end].modes, face, n)
+  const metal = solver.panel?.kind === 'metal'
+  if (!metal) light = mapped(face.t, light, n)
+  down.push(light)
+  light = metal ? mapped(face.r, light, n) : returned(solver.levels[0].w, light, n)
+  const up: Float64Array[] = [light]
+  for (let k = end - 1; k >= 0; k--) {
+    if (k < end - 1 || !metal) {
+      faceBetween(slots[k].modes, slots[k + 1].modes, face, n)
+      light = mapped(face.tUp, light, n)
+    }
     const { modes } = slots[k]
     if (k > 0) light = mapped(modes.tilted ? modes.pBack : modes.p, light, n)
     up.push(light)

@@ -52,8 +52,9 @@ export class Solver {
   private readonly air: Medium
   private readonly joiner: Joiner
   private readonly face: Packet
-  /** Air, the layers, the medium at the end: read by `firstPass`. */
+  /** Air, the layers, the medium at the end, and what that is: read by `firstPass`. */
   slots: readonly Slot[] = []
+  panel: PanelEnd | undefined
   /** Packets from the panel up, and what lies below each: read by `Sensitivity`. */
   segments: readonly Segment[] = []
   levels: readonly Below[] = []
@@ -63,7 +64,6 @@ export class Solver {
   /** Highest packet that changed in the call before. */
   private highestBefore = -1
   private structure = ''
-  private panel: PanelEnd | undefined
   private stokes: EmissionStokes = UNPOLARIZED
   private panelXi = Number.NaN
   private layers: readonly OpticalLayer[] = []

@@ -1,4 +1,5 @@
 /** Ideal parts in the place of real ones, for the light budget: each function takes away one imperfection of one layer. */
+import { meanIndexOf } from '../appearance/meanIndex.js'
 import { internalTransmittances, SMALLEST_TRANSMITTANCE } from '../appearance/polarizerIndices.js'
 import { retardanceAt550 } from '../appearance/retarderIndices.js'
 import { indexAt } from '../materials/indexAt.js'
@@ -14,13 +15,6 @@ import type {
 
 /** A film that absorbs almost all must be thick: squeezed into less, its k is so large that its own faces reflect. */
 const LEAKPROOF_THICKNESS_NM = 10e6
-
-/** Mean real index of a layer over wavelength. */
-export function meanIndexOf(layer: Layer, wavelengthsNm: Float64Array): Float64Array {
-  if (layer.kind !== 'crystal') return indexAt(layer.index, wavelengthsNm).n
-  const axes = layer.indices.map((law) => indexAt(law, wavelengthsNm).n)
-  return wavelengthsNm.map((_, i) => (axes[0][i] + axes[1][i] + axes[2][i]) / 3)
-}
 
 /** The layer with another mean real index; birefringence and absorption stay. */
 export function withMeanIndex(layer: Layer, mean: Float64Array, wavelengthsNm: Float64Array): Layer {

@@ -2,10 +2,10 @@
  * The stack of a file with only some of its imperfections; each of the others is replaced by what an ideal part would do.
  * The front face and the direction are not in the stack: whoever looks at it takes them away.
  */
+import { meanIndexOf } from '../appearance/meanIndex.js'
 import { retardanceAt550 } from '../appearance/retarderIndices.js'
 import type { CrystalLayer, Layer, PolarizerLayer, RetarderLayer, Stack } from '../stack/stack.js'
 import {
-  meanIndexOf,
   withImmersion,
   withMeanIndex,
   withoutLeakage,

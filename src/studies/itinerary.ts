@@ -2,99 +2,134 @@
  * What happens to the light on its way: the state of polarization after each layer, going in and coming back, on the
  * first pass (reflections that join later left out). Flux is relative to what fell on the screen.
  */
+import { meanIndexOf } from '../appearance/meanIndex.js'
 import { Scene } from '../appearance/scene.js'
 import { indexAt } from '../materials/indexAt.js'
 import { firstPass } from '../optics/firstPass.js'
-import type { Layer, Stack } from '../stack/stack.js'
+import type { Direction, Layer, Stack } from '../stack/stack.js'
 import { degrees } from './evaluate.js'
+import { slicesOf } from './slices.js'
 
-export interface ItineraryQuestion {
+export interface ItineraryQuestion extends Direction {
   readonly wavelengthsNm: readonly number[]
-  readonly theta: number
-  readonly phi: number
 }
 
 export interface Itinerary {
   readonly title: string
   readonly theta_deg: number
   readonly phi_deg: number
+  /** By wavelength; of each, in the order of the way: in through every layer to the panel, and out again into the air. */
   readonly passes: readonly Pass[]
 }
 
 /**
- * Light just after a layer. Stokes vector in the display's frame (S1 > 0 along 0°, S2 > 0 along 45° as the viewer sees
- * it, S3 > 0 right-handed as named from the source); S0 is the flux, so a half-wave film keeps it and a polarizer halves it.
+ * Light just after a layer: behind it going in, in front of it coming out; at the panel before and after the mirror. Stokes
+ * vector in the display's frame (S1 > 0 along 0°, S2 > 0 along 45° as the viewer sees it, S3 > 0 right-handed as named from
+ * the source); S0 is the flux, so a half-wave film keeps it and a polarizer halves it.
  */
 export interface Pass {
   readonly wavelength_nm: number
   readonly layer: string
   readonly direction: 'in' | 'out'
-  readonly stokes: readonly [number, number, number, number]
+  readonly stokes: Stokes
   /** Of the polarization ellipse, [0, 180). */
   readonly azimuth_deg: number
   /** -45 (left circular) to 45 (right circular). */
   readonly ellipticity_deg: number
   readonly degree_of_polarization: number
+  /** States inside a film that turns the light, on the way to the one after it; evenly spaced. */
+  readonly within?: readonly Stokes[]
 }
 
-/** Needs a mirror panel: over a metal half-space the last face is the mirror. */
+export type Stokes = readonly [number, number, number, number]
+
 export function itinerary(stack: Stack, { wavelengthsNm, theta, phi }: ItineraryQuestion): Itinerary {
-  const wavelengths = Float64Array.from(wavelengthsNm)
-  const scene = new Scene(stack, wavelengths)
-  const { solver } = scene.look(stack, theta, phi)
+  return {
+    title: stack.title,
+    theta_deg: degrees(theta),
+    phi_deg: degrees(phi),
+    passes: wavelengthsNm.flatMap((nm) => passesAt(stack, nm, { theta, phi })),
+  }
+}
+
+/** A medium the light stands in, and the layer it belongs to. */
+interface Station {
+  readonly layer: string
+  readonly index: number
+  /** In the middle of a film. */
+  readonly within: boolean
+}
+
+function passesAt(stack: Stack, wavelength_nm: number, { theta, phi }: Direction): Pass[] {
+  const wavelength = Float64Array.of(wavelength_nm)
+  const slices = stack.layers.map((layer) => slicesOf(layer, wavelength_nm))
+  const { solver } = new Scene(stack, wavelength).look({ ...stack, layers: slices.flat() }, theta, phi)
   const { down, up } = firstPass(solver)
-  const names = [...stack.layers.map((layer) => layer.id), 'panel']
-  const indices = [...stack.layers.map(meanIndexLaw), stack.panel.index].map((law) => indexAt(law, wavelengths).n)
-  const passes: Pass[] = []
-  wavelengthsNm.forEach((wavelength_nm, i) => {
-    const at = (light: Float64Array, index: number) =>
-      describe(component(light, i, wavelengths.length), index, theta, phi)
-    down.forEach((light, k) => {
-      const state = at(light, indices[k][i])
-      passes.push({ wavelength_nm, layer: names[k], direction: 'in', ...withHand(state, 1) })
-    })
-    up.forEach((light, k) => {
-      const layer = names.length - 2 - k
-      const state = at(light, layer >= 0 ? indices[layer][i] : 1)
-      passes.push({ wavelength_nm, layer: layer >= 0 ? names[layer] : 'air', direction: 'out', ...withHand(state, -1) })
-    })
+  const films = stack.layers.map((layer, k) => stations(layer, slices[k].length, wavelength))
+  const { panel } = stack
+  const immersion = panel.kind === 'mirror' ? indexAt(panel.index, wavelength).n[0] : (films.at(-1)?.[0].index ?? 1)
+  const end = { layer: 'panel', index: immersion, within: false }
+  const air = { layer: 'air', index: 1, within: false }
+  const at = (light: Float64Array, station: Station, sense: 1 | -1) => ({
+    station,
+    stokes: stokesOf(light, sense, station.index, { theta, phi }),
   })
-  return { title: stack.title, theta_deg: degrees(theta), phi_deg: degrees(phi), passes }
+  const inward = [...films.flat(), end].map((station, k) => at(down[k], station, 1))
+  const outward = [end, ...films.toReversed().flat(), air].map((station, k) => at(up[k], station, -1))
+  return [...passes(inward, 'in'), ...passes(outward, 'out')].map((pass) => ({ wavelength_nm, ...pass }))
 }
 
-function meanIndexLaw(layer: Layer) {
-  return layer.kind === 'crystal' ? layer.indices[1] : layer.index
+function stations(layer: Layer, count: number, wavelength: Float64Array): Station[] {
+  const index = meanIndexOf(layer, wavelength)[0]
+  return Array.from({ length: count }, (_, k) => ({ layer: layer.id, index, within: k < count - 1 }))
 }
 
-function component(light: Float64Array, i: number, n: number): [number, number, number, number] {
-  return [light[i], light[n + i], light[2 * n + i], light[3 * n + i]]
+/** Gathers what lies inside a film under the pass that leaves it. */
+function passes(
+  way: readonly { readonly station: Station; readonly stokes: Stokes }[],
+  direction: 'in' | 'out',
+): Omit<Pass, 'wavelength_nm'>[] {
+  const found: Omit<Pass, 'wavelength_nm'>[] = []
+  let within: Stokes[] = []
+  for (const { station, stokes } of way) {
+    if (station.within) within.push(stokes)
+    else {
+      found.push({
+        layer: station.layer,
+        direction,
+        stokes,
+        ...ellipseOf(stokes),
+        ...(within.length > 0 && { within }),
+      })
+      within = []
+    }
+  }
+  return found
 }
 
 /**
  * Flux and state of a tangential coherency vector in a medium of index m: Ep = Ex' √(m/cm), Es = Ey' √(m cm), over cos θ of
- * the light that fell on the screen; turned from the plane of incidence into the display's frame.
+ * the light that fell on the screen; turned from the plane of incidence into the display's frame. `sense` is +1 for light
+ * going in (along the solver's z), -1 coming out: the hand is named along the propagation.
  */
-function describe([x, y, u, v]: [number, number, number, number], index: number, theta: number, phi: number) {
+function stokesOf([x, y, u, v]: Float64Array, sense: 1 | -1, index: number, { theta, phi }: Direction): Stokes {
   const sin = Math.sin(theta) / index
   const cos = Math.sqrt(Math.max(0, 1 - sin * sin))
   const scale = index / Math.cos(theta)
   const p = (x * scale) / cos
   const s = y * scale * cos
   const re = 2 * u * scale
-  const s3 = -2 * v * scale
   const [c, d] = [Math.cos(2 * phi), Math.sin(2 * phi)]
-  return { s0: p + s, s1: c * (p - s) + d * re, s2: d * (p - s) - c * re, s3 }
+  return [p + s, c * (p - s) + d * re, d * (p - s) - c * re, -2 * sense * v * scale]
 }
 
-/** `sense` +1 for light going in (along the solver's z), -1 coming back: the hand is named along the propagation. */
-function withHand({ s0, s1, s2, s3 }: ReturnType<typeof describe>, sense: 1 | -1) {
-  const hand = sense * s3
-  const polarized = Math.hypot(s1, s2, hand)
+/** The ellipse of the polarized part. */
+function ellipseOf([s0, s1, s2, s3]: Stokes) {
+  const polarized = Math.hypot(s1, s2, s3)
   const azimuth = degrees(Math.atan2(s2, s1) / 2)
   return {
-    stokes: [s0, s1, s2, hand] as const,
     azimuth_deg: azimuth < 0 ? azimuth + 180 : azimuth,
-    ellipticity_deg: polarized > 0 ? degrees(Math.asin(Math.max(-1, Math.min(1, hand / polarized))) / 2) : 0,
+    ellipticity_deg: polarized > 0 ? degrees(Math.asin(Math.max(-1, Math.min(1, s3 / polarized))) / 2) : 0,
     degree_of_polarization: s0 > 0 ? Math.min(1, polarized / s0) : 0,
   }
 }

@@ -32,13 +32,17 @@ export interface DirectionEvaluation {
   }
 }
 
-export interface LimitEvaluation {
+/** A limit of the file, its direction in degrees. */
+export interface AskedLimit {
   readonly metric: MetricName
   readonly theta_deg: number
   readonly phi_deg: number
   readonly illuminance_lx?: number
   readonly max?: number
   readonly min?: number
+}
+
+export interface LimitEvaluation extends AskedLimit {
   readonly value: number
   /** How far inside the limit (negative: by how much it is missed), in the metric's unit. */
   readonly margin: number
@@ -90,16 +94,17 @@ export function evaluateLimit(scene: Scene, stack: Stack, limit: Limit): LimitEv
   const look = scene.look(stack, limit.theta, limit.phi)
   const value = metricValue(scene, stack, look, limit)
   const margin = limitMargin(limit, value)
+  return { ...askedLimit(limit), value, margin, met: margin >= 0 }
+}
+
+export function askedLimit({ metric, theta, phi, illuminance, max, min }: Limit): AskedLimit {
   return {
-    metric: limit.metric,
-    theta_deg: degrees(limit.theta),
-    phi_deg: degrees(limit.phi),
-    ...(limit.illuminance !== undefined && { illuminance_lx: limit.illuminance }),
-    ...(limit.max !== undefined && { max: limit.max }),
-    ...(limit.min !== undefined && { min: limit.min }),
-    value,
-    margin,
-    met: margin >= 0,
+    metric,
+    theta_deg: degrees(theta),
+    phi_deg: degrees(phi),
+    ...(illuminance !== undefined && { illuminance_lx: illuminance }),
+    ...(max !== undefined && { max }),
+    ...(min !== undefined && { min }),
   }
 }
 

@@ -48,6 +48,8 @@ export type Dispersion = { readonly re450: number; readonly re650: number } | Sp
 interface LayerBase {
   readonly id: string
   readonly thickness: number
+  /** Film card it was made from, as the stack file names it. */
+  readonly film?: string
   /** Joined by amplitudes (true) or by intensities (false). Fixed when the file is read: thickness < 5 um unless given. */
   readonly coherent: boolean
 }
@@ -61,7 +63,7 @@ export interface RetarderLayer extends LayerBase {
   readonly kind: 'retarder'
   readonly index: IndexLaw
   readonly slow_axis: number
-  /** (nx - ny) d at 550 nm; a table gives its own dispersion. */
+  /** (nx - ny) d at 550 nm. A table in a file is kept as this one number and a dispersion. */
   readonly retardance: Spectrum
   /** Exactly one of nz and rth is present. */
   readonly nz?: number

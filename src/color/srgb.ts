@@ -16,15 +16,18 @@ const BRADFORD: Matrix = [
 ]
 /** Its inverse. */
 const BRADFORD_INVERSE: Matrix = [
-  [0.98699291, -0.14705426, 0.15996265],
-  [0.43230527, 0.51836027, 0.04929123],
-  [-0.00852866, 0.04004282, 0.9684867],
+  [0.9869929055, -0.1470542564, 0.1599626517],
+  [0.4323052697, 0.5183602715, 0.0492912282],
+  [-0.0085286646, 0.0400428217, 0.9684866958],
 ]
-/** IEC 61966-2-1, amendment 1 (seven decimals). */
+/**
+ * From the primaries (0.64, 0.33), (0.30, 0.60), (0.15, 0.06) and the white of IEC 61966-2-1: its printed matrix, which has
+ * four decimals and does not quite give white for white, to ten.
+ */
 const XYZ_TO_RGB: Matrix = [
-  [3.2406255, -1.537208, -0.4986286],
-  [-0.9689307, 1.8757561, 0.0415175],
-  [0.0557101, -0.2040211, 1.0569959],
+  [3.2409699419, -1.5373831776, -0.4986107603],
+  [-0.9692436363, 1.8759675015, 0.0415550574],
+  [0.0556300797, -0.2039769589, 1.0569715142],
 ]
 
 /** Linear RGB, 1 for the white on every channel; below 0 or above 1 where the screen cannot follow. */

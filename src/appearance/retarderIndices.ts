@@ -6,10 +6,8 @@
  */
 import { interpolateLinear } from '../numeric/interpolate.js'
 import type { IndexSpectrum } from '../optics/opticalLayer.js'
+import { REFERENCE_NM, retardanceAt550, rthAt550 } from '../stack/retardanceAt550.js'
 import type { RetarderLayer } from '../stack/stack.js'
-
-/** Wavelength at which Re and Rth are quoted, nm (common practice, no source). */
-const REFERENCE_NM = 550
 
 /** nx, ny, nz over wavelength; `meanIndex` is n̄, its k is that of all three axes. */
 export function retarderIndices(
@@ -39,16 +37,6 @@ export function retarderIndices(
     { n: ny, k },
     { n: nz, k },
   ]
-}
-
-export function retardanceAt550({ retardance }: RetarderLayer): number {
-  if (typeof retardance === 'number') return retardance
-  return interpolateLinear(retardance.wavelength_nm, retardance.value, REFERENCE_NM)
-}
-
-/** Rth at 550 nm, nm, from whichever of rth and nz the film is described by. */
-export function rthAt550(layer: RetarderLayer): number {
-  return layer.rth ?? retardanceAt550(layer) * ((layer.nz ?? 1) - 0.5)
 }
 
 /** g(λ) = Re(λ)/Re(550): 1 when flat. */

@@ -3,7 +3,18 @@
  * checked object, what quantity it is, and its period. Given in the file or defaulted makes no difference.
  */
 import type { QuantityKind } from '../units/quantity.js'
-import type { CrystalLayer, IndexLaw, Layer, Panel, PolarizerLayer, RetarderLayer, Spectrum } from './stack.js'
+import { FIELD_LIMITS } from './fieldLimits.js'
+import { retardanceAt550, rthAt550 } from './retardanceAt550.js'
+import type {
+  CrystalLayer,
+  Emission,
+  IndexLaw,
+  Layer,
+  Panel,
+  PolarizerLayer,
+  RetarderLayer,
+  Spectrum,
+} from './stack.js'
 
 /** A part of a stack that owns parameters: a layer, the panel or the emission. */
 export type Owner = Readonly<Record<string, unknown>>
@@ -16,21 +27,25 @@ export interface Field {
   readonly period?: number
   /** Values that make sense whatever the file says, nm, rad, fractions. */
   readonly range: readonly [number, number]
+  /** Where a hand on a knob would look, given the present value. */
+  readonly usual: (value: number) => readonly [number, number]
   readonly get: (owner: Owner) => number
   /** Copy of the owner with the field set. */
   readonly set: (owner: Owner, value: number) => Owner
 }
 
-const LENGTH: readonly [number, number] = [0, 1e7]
-const ANGLE: readonly [number, number] = [-2 * Math.PI, 2 * Math.PI]
-const RETARDANCE: readonly [number, number] = [-1e5, 1e5]
-const SHARE: readonly [number, number] = [0, 1]
+type FieldName = keyof typeof FIELD_LIMITS
 
-function plain(path: string, kind: QuantityKind, range: readonly [number, number], period?: number): Field {
+/** Quantity and limits of a field, which its name tells. */
+function measured(name: FieldName): Pick<Field, 'kind' | 'range' | 'usual'> {
+  const { quantity, min, max, usual } = FIELD_LIMITS[name]
+  return { kind: quantity, range: [min, max], usual }
+}
+
+function plain(path: FieldName, period?: number): Field {
   return {
     path,
-    kind,
-    range,
+    ...measured(path),
     ...(period !== undefined && { period }),
     get: (owner) => owner[path] as number,
     set: (owner, value) => ({ ...owner, [path]: value }),
@@ -39,29 +54,24 @@ function plain(path: string, kind: QuantityKind, range: readonly [number, number
 
 /** Numeric fields of a layer as it stands: a table in place of a number is not a parameter. */
 export function layerFields(layer: Layer): Field[] {
-  const thickness = plain('thickness', 'length', LENGTH)
+  const thickness = plain('thickness')
   switch (layer.kind) {
     case 'isotropic':
       return [thickness, ...indexFields('index', layer.index)]
     case 'retarder':
-      return [
-        thickness,
-        plain('slow_axis', 'angle', ANGLE, Math.PI),
-        ...retarderFields(layer),
-        ...indexFields('index', layer.index),
-      ]
+      return [thickness, plain('slow_axis', Math.PI), ...retarderFields(layer), ...indexFields('index', layer.index)]
     case 'polarizer':
       return [
         thickness,
-        plain('absorption_axis', 'angle', ANGLE, Math.PI),
+        plain('absorption_axis', Math.PI),
         ...polarizerFields(layer),
         ...indexFields('index', layer.index),
       ]
     case 'crystal':
       return [
         thickness,
-        plain('azimuth', 'angle', ANGLE, layer.tilt === 0 ? Math.PI : 2 * Math.PI),
-        plain('tilt', 'angle', [-Math.PI / 2, Math.PI / 2]),
+        plain('azimuth', layer.tilt === 0 ? Math.PI : 2 * Math.PI),
+        plain('tilt'),
         ...crystalIndexFields(layer),
       ]
   }
@@ -69,21 +79,25 @@ export function layerFields(layer: Layer): Field[] {
 
 export function panelFields(panel: Panel): Field[] {
   if (panel.kind === 'metal') return indexFields('index', panel.index)
-  return [...indexFields('index', panel.index), ...numbersOf(panel, ['reflectance', 'depolarized'], 'share', SHARE)]
+  return [...indexFields('index', panel.index), ...numbersOf(panel, ['reflectance', 'depolarized'])]
 }
 
-export const EMISSION_FIELDS: readonly Field[] = [
-  plain('luminance', 'luminance', [0, 1e6]),
-  plain('dark_luminance', 'luminance', [0, 1e6]),
-]
+/** Luminances, and the state of the emission where it is a given one. */
+export function emissionFields({ polarization }: Emission): Field[] {
+  const luminances = [plain('luminance'), plain('dark_luminance')]
+  return polarization === 'none' ? luminances : [...luminances, ...stateFields]
+}
 
-function numbersOf<Key extends string>(
-  owner: { readonly [K in Key]?: Spectrum },
-  keys: readonly Key[],
-  kind: QuantityKind,
-  range: readonly [number, number],
-): Field[] {
-  return keys.filter((key) => typeof owner[key] === 'number').map((key) => plain(key, kind, range))
+const stateFields: readonly Field[] = (['axis', 'ellipticity', 'degree'] as const).map((name) => ({
+  path: `polarization.${name}`,
+  ...measured(name),
+  ...(name === 'axis' && { period: Math.PI }),
+  get: (owner) => (owner.polarization as Record<string, number>)[name],
+  set: (owner, value) => ({ ...owner, polarization: { ...(owner.polarization as object), [name]: value } }),
+}))
+
+function numbersOf<Key extends FieldName>(owner: { readonly [K in Key]?: Spectrum }, keys: readonly Key[]): Field[] {
+  return keys.filter((key) => typeof owner[key] === 'number').map((key) => plain(key))
 }
 
 function polarizerFields(layer: PolarizerLayer): Field[] {
@@ -95,54 +109,47 @@ function polarizerFields(layer: PolarizerLayer): Field[] {
     'transmission_axis_transmittance',
     'absorption_axis_transmittance',
   ] as const
-  return numbersOf(layer, keys, 'share', SHARE)
+  return numbersOf(layer, keys)
 }
 
 function retarderFields(layer: RetarderLayer): Field[] {
-  const fields = typeof layer.retardance === 'number' ? [plain('retardance', 'length', RETARDANCE)] : []
+  const hasNz = layer.nz !== undefined || retardanceAt550(layer) !== 0
   const dispersed = layer.dispersion === undefined || 're450' in layer.dispersion
-  return [...fields, nzField, rthField, ...(dispersed && fields.length > 0 ? dispersionFields : [])]
+  return [
+    ...numbersOf(layer, ['retardance']),
+    ...(hasNz ? [nzField] : []),
+    rthField,
+    ...(dispersed && typeof layer.retardance === 'number' ? dispersionFields : []),
+  ]
 }
 
-/** Re at 550 nm, to turn one of nz and rth into the other. */
-function retardanceOf(owner: Owner): number {
-  const retardance = owner.retardance as Spectrum
-  if (typeof retardance === 'number') return retardance
-  const middle = retardance.wavelength_nm.findIndex((nm) => nm >= 550)
-  return retardance.value[Math.max(0, middle)]
-}
+const reOf = (owner: Owner) => retardanceAt550(owner as unknown as RetarderLayer)
 
 /** Setting nz drops rth, and the other way round: a film is described by one of them. */
 const nzField: Field = {
   path: 'nz',
-  kind: 'number',
-  range: [-1e3, 1e3],
-  get: (owner) => (owner.nz as number | undefined) ?? (owner.rth as number) / retardanceOf(owner) + 0.5,
+  ...measured('nz'),
+  get: (owner) => (owner.nz as number | undefined) ?? (owner.rth as number) / reOf(owner) + 0.5,
   set: ({ rth: _, ...owner }, value) => ({ ...owner, nz: value }),
 }
 
 const rthField: Field = {
   path: 'rth',
-  kind: 'length',
-  range: RETARDANCE,
-  get: (owner) => (owner.rth as number | undefined) ?? retardanceOf(owner) * ((owner.nz as number) - 0.5),
+  ...measured('rth'),
+  get: (owner) => rthAt550(owner as unknown as RetarderLayer),
   set: ({ nz: _, ...owner }, value) => ({ ...owner, rth: value }),
 }
 
 /** A flat film has both ratios at 1. */
 const dispersionFields: readonly Field[] = (['re450', 're650'] as const).map((ratio) => ({
   path: `dispersion.${ratio}`,
-  kind: 'number',
-  range: [0, 3],
+  ...measured(ratio),
   get: (owner) => (owner.dispersion as Record<string, number> | undefined)?.[ratio] ?? 1,
   set: (owner, value) => ({
     ...owner,
     dispersion: { re450: 1, re650: 1, ...(owner.dispersion as object), [ratio]: value },
   }),
 }))
-
-const INDEX_RANGE: readonly [number, number] = [0.01, 10]
-const EXTINCTION_RANGE: readonly [number, number] = [0, 20]
 
 /** `index`, `index.n`, `index.k`, `index.cauchy_nm.0` … as far as the law has numbers. */
 function indexFields(path: string, law: IndexLaw): Field[] {
@@ -175,24 +182,21 @@ function lawFields(
   const real: Field[] = [
     {
       path: `${path}.n`,
-      kind: 'number',
-      range: INDEX_RANGE,
+      ...measured('n'),
       get: (owner) => parts(owner).n as number,
       set: (owner, value) => write(owner, { ...parts(owner), n: value }),
     },
   ]
   const imaginary: Field = {
     path: `${path}.k`,
-    kind: 'number',
-    range: EXTINCTION_RANGE,
+    ...measured('k'),
     get: (owner) => parts(owner).k as number,
     set: (owner, value) => write(owner, { ...parts(owner), k: value }),
   }
   if (typeof law === 'number') {
     const whole: Field = {
       path,
-      kind: 'number',
-      range: INDEX_RANGE,
+      ...measured('index'),
       get: (owner) => parts(owner).n as number,
       set: (owner, value) => write(owner, value),
     }
@@ -215,8 +219,7 @@ function cauchyFields(
   const terms = (owner: Owner) => (read(owner) as { cauchy_nm: readonly [number, number, number] }).cauchy_nm
   return [0, 1, 2].map((k) => ({
     path: `${path}.cauchy_nm.${k}`,
-    kind: 'number',
-    range: [-1e12, 1e12],
+    ...measured('cauchy_nm'),
     get: (owner) => terms(owner)[k],
     set: (owner, value) =>
       write(owner, { cauchy_nm: terms(owner).map((old, j) => (j === k ? value : old)) as [number, number, number] }),

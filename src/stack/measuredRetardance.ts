@@ -2,12 +2,9 @@
  * A retardance measured over wavelength, Re(λ), is kept as its value at 550 nm and the table as dispersion, which is the
  * same film: Re(λ) = Re(550) · table(λ)/table(550). So the retardance of every film is one number that can be varied.
  */
-import { interpolateLinear } from '../numeric/interpolate.js'
 import type { Fault } from './fault.js'
+import { retardanceAt550, rthAt550 } from './retardanceAt550.js'
 import type { RetarderLayer } from './stack.js'
-
-/** Wavelength at which retardances are quoted, nm (common practice, no source). */
-const REFERENCE_NM = 550
 
 /** What is wrong with the retardance of a film and its thickness. */
 export function retardanceFault({ retardance, dispersion, thickness, rth, nz }: RetarderLayer): Fault | undefined {
@@ -19,12 +16,12 @@ export function retardanceFault({ retardance, dispersion, thickness, rth, nz }: 
       next: 'remove dispersion, or give the retardance as a number',
     }
   }
-  const re = typeof retardance === 'number' ? retardance : valueAt550(retardance)
+  const re = retardanceAt550({ retardance })
   if (typeof retardance !== 'number' && re === 0) {
     const next = 'give the number 0, with rth for a C-plate'
     return { code: 'out_of_range', message: 'the table is zero at 550 nm', received: '0', next }
   }
-  const out = (rth ?? re * ((nz ?? 1) - 0.5)) + re / 2
+  const out = rthAt550({ retardance: re, rth, nz }) + re / 2
   return birefringenceFault(Math.max(Math.abs(re), Math.abs(out)), thickness)
 }
 
@@ -44,9 +41,5 @@ function birefringenceFault(largestNm: number, thicknessNm: number): Fault | und
 export function withScalarRetardance(layer: RetarderLayer): RetarderLayer {
   const { retardance } = layer
   if (typeof retardance === 'number') return layer
-  return { ...layer, retardance: valueAt550(retardance), dispersion: retardance }
-}
-
-function valueAt550({ wavelength_nm, value }: Exclude<RetarderLayer['retardance'], number>): number {
-  return interpolateLinear(wavelength_nm, value, REFERENCE_NM)
+  return { ...layer, retardance: retardanceAt550(layer), dispersion: retardance }
 }

@@ -1,6 +1,6 @@
 /** Parameter paths such as `half.slow_axis` or `panel.reflectance`: listed, read and set on a checked stack. */
 import type { QuantityKind } from '../units/quantity.js'
-import { EMISSION_FIELDS, type Field, layerFields, type Owner, panelFields } from './fields.js'
+import { emissionFields, type Field, layerFields, type Owner, panelFields } from './fields.js'
 import type { Emission, Layer, Panel, Stack } from './stack.js'
 
 export interface ParameterInfo {
@@ -9,7 +9,10 @@ export interface ParameterInfo {
   /** nm, rad, fractions. */
   readonly value: number
   readonly period?: number
+  /** What is physically possible. */
   readonly range: readonly [number, number]
+  /** Where a hand on a knob would look. */
+  readonly usual: readonly [number, number]
 }
 
 /** Every numeric parameter of the stack, layers from the top down, then panel and emission. */
@@ -17,16 +20,13 @@ export function parameterPaths(stack: Stack): ParameterInfo[] {
   const owners: [string, Owner, readonly Field[]][] = [
     ...stack.layers.map((layer): [string, Owner, readonly Field[]] => [layer.id, asOwner(layer), layerFields(layer)]),
     ['panel', asOwner(stack.panel), panelFields(stack.panel)],
-    ['emission', asOwner(stack.emission), EMISSION_FIELDS],
+    ['emission', asOwner(stack.emission), emissionFields(stack.emission)],
   ]
   return owners.flatMap(([id, owner, fields]) =>
-    fields.map(({ path, kind, period, range, get }) => ({
-      path: `${id}.${path}`,
-      kind,
-      range,
-      value: get(owner),
-      ...(period !== undefined && { period }),
-    })),
+    fields.map(({ path, kind, period, range, usual, get }) => {
+      const value = get(owner)
+      return { path: `${id}.${path}`, kind, range, usual: usual(value), value, ...(period !== undefined && { period }) }
+    }),
   )
 }
 
@@ -148,7 +148,9 @@ function resolve(stack: Stack, path: string): { owner: Owner; field: Field; plac
 
 function ownerOf(stack: Stack, id: string): { owner: Owner; place: Place; fields: readonly Field[] } | undefined {
   if (id === 'panel') return { owner: asOwner(stack.panel), place: 'panel', fields: panelFields(stack.panel) }
-  if (id === 'emission') return { owner: asOwner(stack.emission), place: 'emission', fields: EMISSION_FIELDS }
+  if (id === 'emission') {
+    return { owner: asOwner(stack.emission), place: 'emission', fields: emissionFields(stack.emission) }
+  }
   const place = stack.layers.findIndex((layer) => layer.id === id)
   if (place < 0) return undefined
   return { owner: asOwner(stack.layers[place]), place, fields: layerFields(stack.layers[place]) }

@@ -1,8 +1,8 @@
 /** Ideal parts in the place of real ones, for the light budget: each function takes away one imperfection of one layer. */
 import { meanIndexOf } from '../appearance/meanIndex.js'
 import { internalTransmittances, SMALLEST_TRANSMITTANCE } from '../appearance/polarizerIndices.js'
-import { retardanceAt550 } from '../appearance/retarderIndices.js'
 import { indexAt } from '../materials/indexAt.js'
+import { retardanceAt550 } from '../stack/retardanceAt550.js'
 import type {
   CrystalLayer,
   IndexLaw,

@@ -3,7 +3,7 @@
  * The front face and the direction are not in the stack: whoever looks at it takes them away.
  */
 import { meanIndexOf } from '../appearance/meanIndex.js'
-import { retardanceAt550 } from '../appearance/retarderIndices.js'
+import { retardanceAt550 } from '../stack/retardanceAt550.js'
 import type { CrystalLayer, Layer, PolarizerLayer, RetarderLayer, Stack } from '../stack/stack.js'
 import {
   withImmersion,

@@ -1,5 +1,5 @@
-import { retardanceAt550, rthAt550 } from '../appearance/retarderIndices.js'
 import { indexAt } from '../materials/indexAt.js'
+import { retardanceAt550, rthAt550 } from '../stack/retardanceAt550.js'
 import type { CrystalLayer, Layer, RetarderLayer } from '../stack/stack.js'
 
 /** Turn of the state of polarization within one slice, and slices of one layer at most (two full turns). */

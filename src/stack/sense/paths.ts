@@ -1,5 +1,5 @@
 import { type Fault, isMapping, type PathKey, type PlacedFault, shortList, valueAt } from '../fault.js'
-import { EMISSION_FIELDS, type Field, layerFields, panelFields } from '../fields.js'
+import { emissionFields, type Field, layerFields, panelFields } from '../fields.js'
 import { nearestName } from '../nearestName.js'
 import { layerIds } from './layerIds.js'
 import type { Sense } from './sense.js'
@@ -28,8 +28,9 @@ export function pathFault(path: string, { draft, raw }: Sense): Fault | undefine
   const ids = layerIds(raw)
   const place = ids.indexOf(id)
   if (id === 'panel') return draft.panel && fieldFault(id, field, panelFields(draft.panel), draft.panel)
-  if (id === 'emission') return draft.emission && fieldFault(id, field, EMISSION_FIELDS, draft.emission)
-  if (place < 0) return unknownId(id, field, [...ids.filter((known) => known !== undefined), 'panel', 'emission'])
+  if (id === 'emission') return draft.emission && fieldFault(id, field, emissionFields(draft.emission), draft.emission)
+  if (place < 0)
+    return unknownId(id, field, [...new Set(ids.filter((known) => known !== undefined)), 'panel', 'emission'])
   const layer = draft.layers[place]
   return layer && fieldFault(id, field, layerFields(layer), layer)
 }

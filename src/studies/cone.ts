@@ -6,7 +6,7 @@ import { gaussLegendre } from '../numeric/gaussLegendre.js'
 import type { Stack } from '../stack/stack.js'
 import { degrees } from './evaluate.js'
 import type { Hooks } from './hooks.js'
-import { mapInline, type ParallelMap, type Task } from './parallel.js'
+import { leadingResults, mapInline, type ParallelMap, type Task } from './parallel.js'
 import { prepareStack } from './prepareStack.js'
 
 export interface ConeQuestion {
@@ -96,7 +96,7 @@ export async function cone(
   const half = phis.length % 2 === 0 && hasHalfTurnSymmetry(stack, question.thetaMax)
   const computed = half ? phis.slice(0, phis.length / 2) : phis
   const rows = await map(coneRow, { stack, phis: computed }, thetas, hooks)
-  const done = rows.filter((row): row is Row => row !== undefined)
+  const done = leadingResults(rows)
   const whole = <T>(values: readonly T[]): T[] => (half ? [...values, ...values] : [...values])
   const luminous = done.map((row) => whole(row.luminous))
   const lab = done.map((row) => whole(row.lab))

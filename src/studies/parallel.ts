@@ -22,7 +22,14 @@ export type ParallelMap = <Shared, Job, Result>(
   hooks?: Hooks,
 ) => Promise<(Result | undefined)[]>
 
-/** The same in the thread at hand, giving way between jobs so that a stop can be noticed. */
+/** The results before the first that is missing: what a stopped study can still tell. */
+export function leadingResults<Result>(results: readonly (Result | undefined)[]): Result[] {
+  let count = 0
+  while (count < results.length && results[count] !== undefined) count++
+  return results.slice(0, count) as Result[]
+}
+
+/** A parallel map in the thread at hand, giving way between jobs so that a stop can be noticed. */
 export const mapInline: ParallelMap = async (task, shared, jobs, hooks = {}) => {
   const run = await task.prepare(shared)
   const results = new Array(jobs.length)

@@ -10,7 +10,7 @@ import type { MetricRequest, Stack } from '../stack/stack.js'
 import { fromPlain, type QuantityKind, toPlain } from '../units/quantity.js'
 import type { Hooks } from './hooks.js'
 import { metricKey } from './metricKey.js'
-import { mapInline, type ParallelMap, type Task } from './parallel.js'
+import { leadingResults, mapInline, type ParallelMap, type Task } from './parallel.js'
 import { prepareStack } from './prepareStack.js'
 
 export interface SweepAxis {
@@ -103,8 +103,8 @@ export async function sweep(
     to: Math.min(count, (k + 1) * BLOCK),
   }))
   const results = await map(sweepBlock, { stack, question }, blocks, hooks)
-  const firstMissing = results.indexOf(undefined)
-  const values = (firstMissing < 0 ? results : results.slice(0, firstMissing)).flatMap((block) => block ?? [])
+  const done = leadingResults(results)
+  const values = done.flat()
   const width = question.requests.length
   const names = question.requests.map((request) => metricKey(request, question.requests))
   return {
@@ -115,7 +115,7 @@ export async function sweep(
       values: axisValues.map((value) => toPlain(value, kind)),
     })),
     metrics: Object.fromEntries(names.map((name, m) => [name, values.filter((_, k) => k % width === m)])),
-    interrupted: firstMissing >= 0,
+    interrupted: done.length < blocks.length,
   }
 }
 

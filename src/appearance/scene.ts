@@ -7,6 +7,7 @@ import { xyzToLab } from '../color/cielab.js'
 import { ambientContrast } from '../color/contrast.js'
 import { illuminantAt } from '../color/illuminant.js'
 import { type ColorWeights, createColorWeights } from '../color/weights.js'
+import { spectrumToXyz } from '../color/xyz.js'
 import { type Front, Solver } from '../optics/solver.js'
 import type { Direction, Stack } from '../stack/stack.js'
 import { wavelengthsOf } from '../stack/wavelengths.js'
@@ -81,11 +82,7 @@ export class Scene {
     solver.solve(this.opticalStack.layersOf(stack), this.opticalStack.panelOf(stack), theta, phi, stokes)
     const { reflectance, frontReflectance } = solver
     const { whiteXyz } = this.weights
-    const xyz: [number, number, number] = [
-      weigh(this.weights.x, reflectance),
-      weigh(this.weights.y, reflectance),
-      weigh(this.weights.z, reflectance),
-    ]
+    const xyz = spectrumToXyz(this.weights, reflectance)
     const [wx, wy, wz] = this.colorWeights
     const look = {
       theta,

@@ -2,9 +2,15 @@ import { compareJob } from './compare.js'
 import { coneRow } from './cone.js'
 import { optimizeJob } from './optimize.js'
 import type { Task } from './parallel.js'
+import { passingDraws } from './scaledYields.js'
+import { sensitivityReplicate } from './sensitivity.js'
 import { sweepBlock } from './sweep.js'
+import { toleranceBlock } from './toleranceBlock.js'
 
 /** Everything a worker can be asked for, by name. */
 export const TASKS: ReadonlyMap<string, Task<never, never, unknown>> = new Map(
-  [compareJob, coneRow, optimizeJob, sweepBlock].map((task) => [task.name, task as Task<never, never, unknown>]),
+  [compareJob, coneRow, optimizeJob, sweepBlock, toleranceBlock, sensitivityReplicate, passingDraws].map((task) => [
+    task.name,
+    task as Task<never, never, unknown>,
+  ]),
 )

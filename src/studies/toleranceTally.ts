@@ -80,7 +80,15 @@ export class ToleranceTally {
     return this.limits.map((limit, k) => ({ ...askedLimit(limit), ...this.yieldOf(this.limitsPassed[k]) }))
   }
 
+  /** The limit that costs the most yield; undefined where none costs any. */
+  mostCostly(): Limit | undefined {
+    const least = Math.min(...this.limitsPassed)
+    return least < this.draws ? this.limits[this.limitsPassed.indexOf(least)] : undefined
+  }
+
+  /** By request, as all that follows. */
   spreads(): MetricSpread[] {
+    if (this.draws === 0) return []
     return this.distributions.map((values) => ({
       mean: values.mean,
       std: values.standardDeviation,
@@ -93,8 +101,9 @@ export class ToleranceTally {
     }))
   }
 
-  /** By request; where the file limits the metric, one edge lies at the limit. */
+  /** Where the file limits the metric, one edge lies at the limit. */
   histograms(): Histogram[] {
+    if (this.draws === 0) return []
     return this.distributions.map((values, k) => {
       const limit = this.limits[this.limitAt.indexOf(k)]
       return values.histogram(BINS, limit?.max ?? limit?.min)

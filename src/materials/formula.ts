@@ -4,7 +4,9 @@
  * `formulaTokens` lets through only known names and signs, mathjs parses, `formulaClosure` evaluates.
  */
 import { closureOf, type Evaluate } from './formulaClosure.js'
-import { FormulaError, type FormulaToken, readTokens } from './formulaTokens.js'
+import { FormulaError } from './formulaError.js'
+import { checkNeighbors, checkParentheses } from './formulaOrder.js'
+import { type FormulaToken, readTokens } from './formulaTokens.js'
 import { allowedIn } from './formulaVocabulary.js'
 
 export interface FormulaFault {
@@ -30,6 +32,8 @@ export async function prepareFormula(
 ): Promise<FormulaFault | undefined> {
   try {
     const tokens = readTokens(text, variables)
+    checkNeighbors(tokens)
+    checkParentheses(tokens)
     const key = keyOf(text, variables)
     if (!prepared.has(key)) prepared.set(key, await compile(tokens, variables))
     return undefined
@@ -73,7 +77,7 @@ function located(error: unknown, tokens: readonly FormulaToken[], words: readonl
   let end = 0
   const at = words.findIndex((word) => {
     end += word.length + 1
-    return end >= Number(error.char)
+    return end > Number(error.char)
   })
   const column = at < 0 ? last.column + last.text.length : tokens[at].column
   const reason = message.replace(/ \(char \d+\)$/, '')

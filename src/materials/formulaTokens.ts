@@ -1,27 +1,15 @@
 /**
- * The first of two gates before a formula is evaluated: every character belongs to a number, a known name or one of
- * + - * / ^ ( ) , so that the general parser behind it never sees a string, an index, an assignment or a name of its own.
+ * The first of two gates before a formula is evaluated: every character must belong to a number, a known name or one of
+ * `+ - * / ^ ( ) ,` so that the general parser behind it never sees a string, an index, an assignment or a name of its own.
  */
-import { CONSTANTS, FUNCTIONS } from './formulaVocabulary.js'
-
-/** Longest expression read, characters, and deepest nesting of parentheses: far beyond any dispersion formula. */
-export const FORMULA_LIMITS = { length: 500, depth: 40 } as const
+import { FormulaError } from './formulaError.js'
+import { CONSTANTS, FORMULA_LIMITS, FUNCTIONS } from './formulaVocabulary.js'
 
 export interface FormulaToken {
   readonly kind: 'number' | 'variable' | 'constant' | 'function' | 'sign'
   readonly text: string
   /** 1-based, in the user's text. */
   readonly column: number
-}
-
-/** What is wrong with a formula, and the 1-based column where it was found. */
-export class FormulaError extends Error {
-  constructor(
-    message: string,
-    readonly column: number,
-  ) {
-    super(message)
-  }
 }
 
 const NUMBER = /(?:\d+\.?\d*|\.\d+)(?:[eE][+-]?\d+)?/y
@@ -57,14 +45,12 @@ export function readTokens(text: string, variables: readonly string[]): FormulaT
     at = skipBlanks(text, at + token.text.length)
   }
   if (tokens.length === 0) throw new FormulaError('the formula is empty', 1)
-  checkNesting(tokens)
-  checkNeighbors(tokens)
   return tokens
 }
 
 function skipBlanks(text: string, from: number): number {
   let at = from
-  while (text[at] === ' ' || text[at] === '\t') at++
+  while (' \t\r\n'.includes(text.charAt(at)) && at < text.length) at++
   return at
 }
 
@@ -101,35 +87,4 @@ function unknownSign(sign: string, column: number): FormulaError {
   const meant = MEANT.get(sign)
   const hint = meant === undefined ? '' : `; write ${meant}`
   return new FormulaError(`${JSON.stringify(sign)} cannot stand in a formula${hint}`, column)
-}
-
-function checkNesting(tokens: readonly FormulaToken[]): void {
-  let depth = 0
-  for (const { text, column } of tokens) {
-    if (text === '(') depth++
-    if (text === ')') depth--
-    if (depth > FORMULA_LIMITS.depth) {
-      throw new FormulaError(`parentheses are nested deeper than ${FORMULA_LIMITS.depth}`, column)
-    }
-  }
-}
-
-/** Two values side by side would be read as a product, and `1/2 a` in two ways. */
-function checkNeighbors(tokens: readonly FormulaToken[]): void {
-  tokens.forEach((token, i) => {
-    const next = tokens.at(i + 1)
-    if (token.kind === 'function') {
-      if (next?.text !== '(') throw new FormulaError(`the function ${token.text} needs (…) behind it`, token.column)
-    } else if (next !== undefined && endsValue(token) && beginsValue(next)) {
-      throw new FormulaError(`an operator is missing between "${token.text}" and "${next.text}"`, next.column)
-    }
-  })
-}
-
-function endsValue({ kind, text }: FormulaToken): boolean {
-  return kind !== 'sign' || text === ')'
-}
-
-function beginsValue({ kind, text }: FormulaToken): boolean {
-  return kind !== 'sign' || text === '('
 }

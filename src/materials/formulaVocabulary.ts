@@ -1,3 +1,6 @@
+/** Longest expression read, characters, and deepest nesting of parentheses: far beyond any dispersion formula. */
+export const FORMULA_LIMITS = { length: 500, depth: 40 } as const
+
 /** A function of a formula, and how many arguments it takes. */
 export interface FormulaFunction {
   readonly apply: (...args: number[]) => number

@@ -23,7 +23,7 @@ conditions:
 # From the viewer's side to the panel. Layers thinner than 5 um are joined by amplitudes (they show fringes) unless they say
 # coherent: false.
 layers:
-  - {id: hard_coat, kind: isotropic, index: {material: pmma}, thickness: 5 um}
+  - {id: hard_coat, kind: isotropic, index: 1.49, thickness: 5 um}   # or index: {material: sio2}; offblack materials lists them
   - id: polarizer
     kind: polarizer
     absorption_axis: 90 deg

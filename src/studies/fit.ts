@@ -4,25 +4,14 @@
  */
 import { createSpectrumExperiment } from '../appearance/spectrumExperiment.js'
 import { fitFromStarts, type StartsResult } from '../search/fitFromStarts.js'
-import type { ResidualProblem } from '../search/residualProblem.js'
 import { findParameter, getParameter, setParameters } from '../stack/parameters.js'
-import type { Direction, FitQuestion, Stack } from '../stack/stack.js'
+import type { Stack } from '../stack/stack.js'
 import { type QuantityKind, toPlain } from '../units/quantity.js'
-import { designVariables } from './designProblem.js'
 import { degrees } from './evaluate.js'
+import { fitProblem, type Measured } from './fitProblem.js'
 import type { Hooks } from './hooks.js'
 import { type SingleFault, singleFaults } from './singleFaults.js'
 import { type Unresolved, unresolvedCombinations } from './unresolved.js'
-
-/** Measured spectra; fractions, rad. */
-export interface Measured {
-  readonly directions: readonly MeasuredSpectrum[]
-}
-
-export interface MeasuredSpectrum extends Direction {
-  readonly wavelengthNm: readonly number[]
-  readonly reflectance: readonly number[]
-}
 
 export interface FitSettings {
   readonly seed: number
@@ -109,27 +98,6 @@ export function fit(stack: Stack, measured: Measured, settings: FitSettings, hoo
     evaluations: found.evaluations,
     reason: found.reason,
     interrupted: found.reason === 'stopped',
-  }
-}
-
-/** Measured less model over the noise, where that is stated. */
-export function fitProblem(stack: Stack, measured: Measured, question: FitQuestion): ResidualProblem {
-  const paths = Object.keys(question.vary)
-  const experiment = createSpectrumExperiment(stack, paths, measured.directions)
-  const target = measured.directions.flatMap(({ reflectance }) => [...reflectance])
-  const scale = 1 / (question.noise ?? 1)
-  return {
-    variables: designVariables(stack, question),
-    count: experiment.count,
-    noiseIsKnown: question.noise !== undefined,
-    residuals: (x, out) => {
-      experiment.reflectance(x, out)
-      for (let i = 0; i < out.length; i++) out[i] = (out[i] - target[i]) * scale
-    },
-    jacobian: (x, out) => {
-      experiment.jacobian(x, out)
-      for (let i = 0; i < out.length; i++) out[i] *= scale
-    },
   }
 }
 

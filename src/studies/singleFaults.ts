@@ -2,7 +2,7 @@ import { fitFromStarts } from '../search/fitFromStarts.js'
 import { parameterPaths } from '../stack/parameters.js'
 import type { FitQuestion, Range, Stack } from '../stack/stack.js'
 import { toPlain } from '../units/quantity.js'
-import { fitProblem, type Measured } from './fit.js'
+import { fitProblem, type Measured } from './fitProblem.js'
 import type { Hooks } from './hooks.js'
 
 /** One thing that may have gone wrong, everything else as the file has it. */

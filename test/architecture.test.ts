@@ -22,6 +22,8 @@ const ROOMS: readonly (readonly [room: string, not: readonly string[]])[] = [
 ]
 const NAMES = ROOMS.map(([room]) => room)
 const OUTER = ['cli', 'page']
+/** Tells the version; the core does without. */
+const PACKAGE = '../package.json'
 
 const sources = readSources()
 const core = sources.filter(({ room }) => !OUTER.includes(room))
@@ -44,7 +46,7 @@ describe('rooms', () => {
     const wrong = sources
       .filter((source) => source.room === room)
       .flatMap(({ path, imports }) => imports.map((target) => ({ path, target })))
-      .filter(({ target }) => !allowed.some((name) => target.startsWith(`${name}/`)))
+      .filter(({ target }) => target !== PACKAGE && !allowed.some((name) => target.startsWith(`${name}/`)))
     expect(wrong).toEqual([])
   })
 
@@ -63,6 +65,10 @@ describe('the core', () => {
       packages.filter((name) => name.startsWith('node:')).map((name) => ({ path, name })),
     )
     expect(wrong).toEqual([])
+  })
+
+  test('does not know its own version', () => {
+    expect(core.filter(({ imports }) => imports.includes(PACKAGE)).map(({ path }) => path)).toEqual([])
   })
 
   test('prints nothing, reads no clock and draws no unseeded number', () => {

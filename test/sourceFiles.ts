@@ -16,9 +16,9 @@ export interface SourceFile {
   readonly packages: readonly string[]
 }
 
-/** Every TypeScript source of the program. */
+/** Every source of the program, with its type declarations. */
 export function readSources(): SourceFile[] {
-  const paths = readdirSync(SRC, { recursive: true, encoding: 'utf8' }).filter((path) => /\.tsx?$/.test(path))
+  const paths = readdirSync(SRC, { recursive: true, encoding: 'utf8' }).filter((path) => /\.(tsx?|js)$/.test(path))
   return paths.sort().map((path) => {
     const text = readFileSync(join(SRC, path), 'utf8')
     const names = importedNames(text)

@@ -61,6 +61,7 @@ export const VERBS: readonly Verb[] = [
   {
     name: 'schema',
     summary: 'JSON Schema of the stack file, for editors',
+    options: [new Option('--film', 'of a film card instead')],
     example: 'schema > stack.schema.json',
     load: () => import('./verbs/schema.js'),
   },

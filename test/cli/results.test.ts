@@ -56,6 +56,19 @@ describe('optimize', () => {
     expect(one.code).toBe(0)
   })
 
+  test('--out writes the improved stack file: comments kept, files still found, the digits those of the search', async () => {
+    const spectrum = 'wavelength_nm,reflectance\n400,0.40\n700,0.48\n'
+    const text = SMALL_STACK.replace('reflectance: 45 %', 'reflectance: {file: panel.csv}')
+    const folder = workFolder({ [FILE]: `# mine\n${text}`, 'panel.csv': spectrum })
+    const { stdout } = await offblack(['optimize', FILE, '--json', '--out', 'deep/out'], folder)
+    const improved = readFileSync(join(folder, 'deep/out/small.optimized.stack.yaml'), 'utf8')
+    expect(improved).toContain('# mine\n')
+    expect(improved).toContain('{file: ../../panel.csv}')
+    const again = await offblack(['evaluate', 'deep/out/small.optimized.stack.yaml', '--json'], folder)
+    const [{ luminous_reflectance }] = JSON.parse(again.stdout).directions
+    expect(luminous_reflectance).toBeCloseTo(JSON.parse(stdout).best.objective, 13)
+  })
+
   test('Ctrl-C keeps the best so far, writes it, and exits with 130', async () => {
     const slow = SMALL_STACK.replace('step: 20 nm', 'step: 1 nm').replace(
       'views: [{theta: 0 deg, phi: 0 deg, weight: 1}]',

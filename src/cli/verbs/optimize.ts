@@ -10,6 +10,7 @@ import { fromPlain } from '../../units/quantity.js'
 import { chartFiles } from '../chartFiles.js'
 import type { Context } from '../context.js'
 import { EXIT, type ExitCode } from '../exitCode.js'
+import { improvedStack } from '../improvedStack.js'
 import { loadStack, requireQuestion } from '../loadStack.js'
 import { runStudy } from '../runStudy.js'
 import { stemOf } from '../stemOf.js'
@@ -22,31 +23,37 @@ interface OptimizeOptions {
 
 export async function run(context: Context<OptimizeOptions>): Promise<ExitCode> {
   const { file, options, terminal } = context
-  const { stack } = await loadStack(context)
+  const { stack, text } = await loadStack(context)
   requireQuestion(stack, 'optimize', file)
   if (options.out !== undefined) await checkFolder(options.out)
   const optimum = await runStudy(context, 'optimize', (hooks, map) =>
     optimize(stack, { seed: options.seed }, hooks, map),
   )
-  const improved = withParameters(stack, optimum.best.parameters)
+  const values = bestValues(stack, optimum)
+  const improved = setParameters(stack, values)
   const { limits } = evaluate(improved)
   const json = jsonText({ ...optimum, limits })
   terminal.print(options.json ? json : optimizeText(stack, optimum, limits, terminal.paint))
   const stem = stemOf(file)
-  await writeResults(context, async () => {
+  await writeResults(context, async (folder) => {
     const charts = await chartFiles(stem, [...beforeAndAfter(stack, improved), searchSheet(optimum)])
-    return new Map<string, string | Uint8Array>([[`${stem}.optimize.json`, json], ...charts])
+    return new Map<string, string | Uint8Array>([
+      [`${stem}.optimized.stack.yaml`, improvedStack({ file, text, stack, sets: options.set }, values, folder)],
+      [`${stem}.optimize.json`, json],
+      ...charts,
+    ])
   })
   if (optimum.interrupted) return EXIT.interrupted
   return limits.every(({ met }) => met) && optimum.best.violation === 0 ? EXIT.done : EXIT.limitMissed
 }
 
-function withParameters(stack: Stack, plain: Optimum['best']['parameters']): Stack {
-  const values = Object.entries(plain).map(([path, value]) => {
+/** Parameters of the best design in nm, rad, fractions. */
+function bestValues(stack: Stack, { best }: Optimum): Record<string, number> {
+  const values = Object.entries(best.parameters).map(([path, plain]) => {
     const kind = findParameter(stack, path)?.kind ?? 'number'
-    return [path, fromPlain(value, kind)] as const
+    return [path, fromPlain(plain, kind)] as const
   })
-  return setParameters(stack, Object.fromEntries(values))
+  return Object.fromEntries(values)
 }
 
 function beforeAndAfter(stack: Stack, improved: Stack) {

@@ -54,7 +54,12 @@ interface Request {
   readonly illuminance?: number
 }
 
-function applicationFaults({ metric, illuminance }: Request, at: readonly PathKey[], { draft }: Sense): PlacedFault[] {
+/** What keeps a metric from being computed for this panel, these luminances, whatever the direction. */
+export function applicationFaults(
+  { metric, illuminance }: Request,
+  at: readonly PathKey[],
+  { draft }: Sense,
+): PlacedFault[] {
   const faults: PlacedFault[] = []
   const tell = (key: string, fault: Fault) => faults.push({ at: [...at, key], ...fault })
   if (metric === 'emission_transmittance' && draft.panel?.kind === 'metal') tell('metric', noEmission())

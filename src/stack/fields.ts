@@ -3,7 +3,7 @@
  * checked object, what quantity it is, and its period. Given in the file or defaulted makes no difference.
  */
 import type { QuantityKind } from '../units/quantity.js'
-import { FIELD_LIMITS } from './fieldLimits.js'
+import { FIELD_LIMITS, type FieldLimits } from './fieldLimits.js'
 import { retardanceAt550, rthAt550 } from './retardanceAt550.js'
 import type {
   CrystalLayer,
@@ -36,10 +36,14 @@ export interface Field {
 
 type FieldName = keyof typeof FIELD_LIMITS
 
+/** How near a value comes to a limit that is excluded. */
+const SMALLEST = 1e-12
+
 /** Quantity and limits of a field, which its name tells. */
 function measured(name: FieldName): Pick<Field, 'kind' | 'range' | 'usual'> {
-  const { quantity, min, max, usual } = FIELD_LIMITS[name]
-  return { kind: quantity, range: [min, max], usual }
+  const limits: FieldLimits = FIELD_LIMITS[name]
+  const least = limits.open === 'min' ? limits.min + SMALLEST : limits.min
+  return { kind: limits.quantity, range: [least, limits.max], usual: limits.usual }
 }
 
 function plain(path: FieldName, period?: number): Field {
@@ -61,12 +65,7 @@ export function layerFields(layer: Layer): Field[] {
     case 'retarder':
       return [thickness, plain('slow_axis', Math.PI), ...retarderFields(layer), ...indexFields('index', layer.index)]
     case 'polarizer':
-      return [
-        thickness,
-        plain('absorption_axis', Math.PI),
-        ...polarizerFields(layer),
-        ...indexFields('index', layer.index),
-      ]
+      return [thickness, plain('absorption_axis', Math.PI), ...polarizerFields(layer), ...clearIndexFields(layer.index)]
     case 'crystal':
       return [
         thickness,
@@ -79,7 +78,7 @@ export function layerFields(layer: Layer): Field[] {
 
 export function panelFields(panel: Panel): Field[] {
   if (panel.kind === 'metal') return indexFields('index', panel.index)
-  return [...indexFields('index', panel.index), ...numbersOf(panel, ['reflectance', 'depolarized'])]
+  return [...clearIndexFields(panel.index), ...numbersOf(panel, ['reflectance', 'depolarized'])]
 }
 
 /** Luminances, and the state of the emission where it is a given one. */
@@ -156,6 +155,11 @@ function indexFields(path: string, law: IndexLaw): Field[] {
   const read = (owner: Owner) => owner[path] as IndexLaw
   const write = (owner: Owner, value: IndexLaw): Owner => ({ ...owner, [path]: value })
   return lawFields(path, law, read, write)
+}
+
+/** Of a medium that has no absorption of its own here. */
+function clearIndexFields(law: IndexLaw): Field[] {
+  return indexFields('index', law).filter(({ path }) => path !== 'index.k')
 }
 
 function crystalIndexFields(layer: CrystalLayer): Field[] {

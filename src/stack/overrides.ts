@@ -53,7 +53,8 @@ function formFault(received: string): Fault {
   return { code: 'bad_option', message: 'this sets nothing', received, allowed: 'half.slow_axis=12deg', next }
 }
 
-function placeOf([first, ...rest]: readonly string[], raw: unknown): PathKey[] | Fault {
+/** Path in the plain data of a path that begins with a layer’s id or a section. */
+export function placeOf([first, ...rest]: readonly string[], raw: unknown): PathKey[] | Fault {
   const ids = layersOf(raw).map((layer) => (isMapping(layer) ? String(layer.id) : ''))
   const place = ids.indexOf(first)
   const keys = rest.map((key) => (/^\d+$/.test(key) ? Number(key) : key))
@@ -83,7 +84,7 @@ export function applyOverride(raw: unknown, { at, value }: Override): { raw: unk
   const isLayer = at[0] === 'layers' && at.length >= 3
   const seeded = isLayer || at[0] === 'panel' || at[0] === 'emission' ? seedParent(raw, at) : raw
   try {
-    const changed = setAt(seeded, at, value)
+    const changed = setAt(isLayer ? keepDispersion(seeded, at, value) : seeded, at, value)
     return { raw: isLayer && at.length === 3 ? withoutRivals(changed, at) : changed }
   } catch (error) {
     if (error instanceof NoPlace) return { fault: error.fault }
@@ -145,6 +146,14 @@ function seedParent(raw: unknown, at: readonly PathKey[]): unknown {
 function defaultIndex(owner: unknown): number | undefined {
   const kind = isMapping(owner) ? String(owner.kind) : ''
   return Object.hasOwn(DEFAULT_INDEX, kind) ? DEFAULT_INDEX[kind as keyof typeof DEFAULT_INDEX] : undefined
+}
+
+/** A number in place of a measured retardance leaves the film its dispersion. */
+function keepDispersion(raw: unknown, at: readonly PathKey[], value: unknown): unknown {
+  const layer = valueAt(raw, at.slice(0, 2))
+  const isMeasured = at.length === 3 && at[2] === 'retardance' && isMapping(layer) && isMapping(layer.retardance)
+  if (!isMeasured || isMapping(value) || Object.hasOwn(layer, 'dispersion')) return raw
+  return setAt(raw, [...at.slice(0, 2), 'dispersion'], layer.retardance)
 }
 
 /** Setting rth puts nz out of force, and so on. */

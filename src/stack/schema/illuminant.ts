@@ -2,7 +2,7 @@ import * as z from 'zod'
 import { DAYLIGHT_KELVIN } from '../../color/daylight.js'
 import type { Illuminant } from '../../color/illuminant.js'
 import type { TableFiles } from '../tableFiles.js'
-import { nameSchema, quantitySchema } from './quantity.js'
+import { quantitySchema } from './quantity.js'
 import { fileTable, inlineTable } from './spectrum.js'
 
 const NAMES = ['D65', 'D50', 'A', 'E', 'FL2', 'FL11', 'LED-B3', 'LED-B5'] as const
@@ -17,7 +17,7 @@ export function illuminantSchema(files: TableFiles, description: string) {
   return z
     .union(
       [
-        nameSchema(NAMES, 'Standard illuminant.'),
+        z.enum(NAMES).meta({ description: 'Standard illuminant.' }),
         daylight,
         fileTable(POWER, files),
         inlineTable(POWER, ['1', '2', '1']),

@@ -1,6 +1,14 @@
 import * as z from 'zod'
-import { displayUnit, formatQuantity, isFault, parseQuantity, type QuantityFault } from '../../units/quantity.js'
-import { describeReceived, type Fault } from '../fault.js'
+import {
+  displayUnit,
+  formatQuantity,
+  isFault,
+  parseQuantity,
+  type QuantityFault,
+  type QuantityKind,
+} from '../../units/quantity.js'
+import { UNIT_TABLES } from '../../units/unitTables.js'
+import type { Fault } from '../fault.js'
 import type { FieldLimits } from '../fieldLimits.js'
 
 // No code is generated at run time: the page's content security policy forbids it.
@@ -20,32 +28,41 @@ export function report(
 /** A number with its unit in the file; in the checked stack nm, radians, fraction. */
 export function quantitySchema(limits: Limits, description: string, example?: string) {
   const { quantity } = limits
-  const unit = displayUnit(quantity)
   return z
-    .union([z.number(), z.string()], { error: () => spellingOf(limits) })
+    .union([z.number(), z.string().meta({ pattern: quantityPattern(quantity) })], { error: () => spellingOf(limits) })
+    .meta({
+      description: quantity === 'number' ? description : `${description} A bare number is in ${bareUnit(limits)}.`,
+      examples: [example ?? formatQuantity(exampleValue(limits), quantity)],
+    })
     .transform((raw, context) => {
       const value = readQuantity(raw, limits)
       if (typeof value === 'number') return value
       report(context, value)
       return z.NEVER
     })
-    .meta({
-      description: unit === '' ? description : `${description} A bare number is in ${bareUnit(limits)}.`,
-      examples: [example ?? formatQuantity(exampleValue(limits), quantity)],
-    })
+}
+
+/** For editors; the reading itself is `parseQuantity`'s. */
+function quantityPattern(quantity: QuantityKind): string {
+  return String.raw`^\s*[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?\s*(${Object.keys(UNIT_TABLES[quantity].units).join('|')})?\s*$`
 }
 
 /** A number without unit. */
 export function numberSchema(limits: Limits, description: string, example?: number) {
   return z
     .number({ error: () => spellingOf(limits) })
+    .meta({
+      description,
+      ...(limits.open === 'min' ? { exclusiveMinimum: limits.min } : { minimum: limits.min }),
+      maximum: limits.max,
+      ...(example !== undefined && { examples: [example] }),
+    })
     .transform((raw, context) => {
       const fault = rangeFault(raw, raw, limits)
       if (fault === undefined) return raw
       report(context, fault)
       return z.NEVER
     })
-    .meta({ description, ...(example !== undefined && { examples: [example] }) })
 }
 
 /** The value in internal units, or what is wrong with it. */
@@ -102,20 +119,4 @@ function exampleValue({ min, max, quantity }: Limits): number {
   const usual = { length: 138, angle: Math.PI / 4, share: 0.45, number: 1, illuminance: 500, luminance: 600 }
   const value = quantity === 'temperature' ? 5000 : usual[quantity]
   return Math.min(max, Math.max(min, value))
-}
-
-/** One of a list of names; the nearest is suggested where none fits. */
-export function nameSchema<const Names extends readonly [string, ...string[]]>(names: Names, description: string) {
-  return z.enum(names).meta({ description, examples: [names[0]] })
-}
-
-/** The fault of a value that is not of the wanted shape. */
-export function shapeFault(raw: unknown, allowed: string): Fault {
-  return {
-    code: 'wrong_type',
-    message: 'the value has the wrong form',
-    received: describeReceived(raw),
-    allowed,
-    next: 'write it in one of the allowed forms',
-  }
 }

@@ -54,14 +54,14 @@ async function formulaFault(law: IndexLaw): Promise<Fault | undefined> {
 function valueFaults(law: IndexLaw, wavelengths: Float64Array): Fault[] {
   if (typeof law === 'number' || 'n' in law || 'material' in law) return []
   const { n } = indexAt(law, wavelengths)
-  const bad = n.findIndex((value) => !(value > FIELD_LIMITS.n.min && value <= FIELD_LIMITS.n.max))
+  const bad = n.findIndex((value) => !(value >= FIELD_LIMITS.n.min && value <= FIELD_LIMITS.n.max))
   if (bad < 0) return []
   return [
     {
       code: 'out_of_range',
       message: `the index cannot be used at ${wavelengths[bad]} nm`,
       received: `n = ${Number(n[bad].toPrecision(5))}`,
-      allowed: `above ${FIELD_LIMITS.n.min}, up to ${FIELD_LIMITS.n.max}`,
+      allowed: `from ${FIELD_LIMITS.n.min} to ${FIELD_LIMITS.n.max}`,
       next: 'check the coefficients and the unit of the wavelength',
     },
   ]

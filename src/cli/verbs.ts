@@ -4,7 +4,7 @@
  */
 import { Option } from 'commander'
 import type { VerbModule } from './context.js'
-import { wholeNumber } from './optionValues.js'
+import { collected, wholeNumber } from './optionValues.js'
 
 export interface Verb {
   readonly name: string
@@ -36,6 +36,33 @@ export const VERBS: readonly Verb[] = [
     ],
     example: 'optimize stacks/dive-computer.stack.yaml --out out',
     load: () => import('./verbs/optimize.js'),
+  },
+  {
+    name: 'compare',
+    summary: 'which film to buy? Every combination of the film cards, ranked',
+    file: 'stack',
+    options: [
+      new Option('--seed <number>', 'of the searches').argParser(wholeNumber(0, 2 ** 31 - 1)).default(1),
+      new Option('--keep <number>', 'candidates that are searched in full').argParser(wholeNumber(1, 1e6)).default(20),
+      new Option('--exhaustive', 'search every candidate in full').default(false),
+      new Option(
+        '--front <axis>',
+        'an axis of the front: objective, price_per_m2, thickness_nm or a metric; repeatable',
+      ).argParser(collected),
+    ],
+    example: 'compare stacks/dive-computer.stack.yaml --out out',
+    load: () => import('./verbs/compare.js'),
+  },
+  {
+    name: 'fit',
+    summary: 'which layer went wrong? Parameters of a measured sample',
+    file: 'stack',
+    options: [
+      new Option('--measured <csv>', 'spectra of the sample').makeOptionMandatory(),
+      new Option('--seed <number>', 'of the starts').argParser(wholeNumber(0, 2 ** 31 - 1)).default(1),
+    ],
+    example: 'fit stacks/dive-computer.stack.yaml --measured stacks/measured/dive-computer.csv',
+    load: () => import('./verbs/fit.js'),
   },
   {
     name: 'check',

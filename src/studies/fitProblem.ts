@@ -1,17 +1,13 @@
 /** A measured sample beside the stack that should explain it, as a least-squares problem. */
 import { createSpectrumExperiment } from '../appearance/spectrumExperiment.js'
 import type { ResidualProblem } from '../search/residualProblem.js'
-import type { Direction, FitQuestion, Stack } from '../stack/stack.js'
+import type { MeasuredSpectrum } from '../stack/readMeasured.js'
+import type { FitQuestion, Stack } from '../stack/stack.js'
 import { designVariables } from './designProblem.js'
 
 /** Measured spectra; fractions, rad. */
 export interface Measured {
   readonly directions: readonly MeasuredSpectrum[]
-}
-
-export interface MeasuredSpectrum extends Direction {
-  readonly wavelengthNm: readonly number[]
-  readonly reflectance: readonly number[]
 }
 
 /** Measured less model over the noise, where that is stated. */

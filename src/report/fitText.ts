@@ -1,0 +1,87 @@
+import type { Stack } from '../stack/stack.js'
+import type { Fit } from '../studies/fit.js'
+import { fixed, given } from './decimals.js'
+import { ESTIMATE_CAUTION } from './evaluateText.js'
+import { type Paint, PLAIN } from './paint.js'
+import { parameterText } from './parameterText.js'
+import { type Column, textTable } from './textTable.js'
+
+/** What the sample turned out to be, what cannot be told apart, and the single faults in order. */
+export function fitText(stack: Stack, fit: Fit, paint: Paint = PLAIN): string {
+  const parts = [
+    `${paint.strong(fit.title)}\nfit to ${readings(fit)} readings from ${fit.directions.length} directions`,
+    parametersText(stack, fit),
+    remainderText(fit),
+    unresolvedText(fit, paint),
+    faultsText(fit),
+    paint.faint(ESTIMATE_CAUTION),
+  ]
+  return `${parts.filter((part) => part !== '').join('\n\n')}\n`
+}
+
+function readings({ directions }: Fit): number {
+  return directions.reduce((sum, { measured }) => sum + measured.length, 0)
+}
+
+const PARAMETERS: readonly Column[] = [
+  { heading: 'parameter', align: 'left' },
+  { heading: '', align: 'left' },
+  { heading: 'in the file', align: 'right' },
+  { heading: 'in the sample', align: 'right' },
+  { heading: '± 1 std. dev.', align: 'right' },
+  { heading: 'off by', align: 'right' },
+]
+
+function parametersText(stack: Stack, { parameters }: Fit): string {
+  const rows = Object.entries(parameters).map(([path, { value, std_error, nominal }]) => {
+    const { unit, shown } = parameterText(stack, path)
+    const error = std_error === null ? 'at its bound' : errorText(shown, std_error)
+    return [path, unit, shown(nominal), shown(value), error, shown(value - nominal)]
+  })
+  return textTable(PARAMETERS, rows)
+}
+
+/** Errors finer than the decimals of the table keep two digits of their own. */
+function errorText(shown: (plain: number) => string, error: number): string {
+  const text = shown(error)
+  return Number(text) === 0 ? Number(error.toPrecision(2)).toString() : text
+}
+
+function remainderText({ residual_rms, noise, noise_is_stated }: Fit): string {
+  const remainder = `left between model and sample: ${fixed(100 * residual_rms, 4)} % rms`
+  if (!noise_is_stated) return `${remainder}; the errors above take that for the noise of a reading`
+  const ratio = residual_rms / noise
+  const verdict = ratio > 1.5 ? 'more than noise: the model misses something' : 'no more than noise'
+  return `${remainder}, ${given(Number(ratio.toPrecision(2)))} times the stated noise (${verdict})`
+}
+
+function unresolvedText({ unresolved }: Fit, paint: Paint): string {
+  if (unresolved.length === 0) return 'every parameter is resolved by these directions'
+  return [paint.strong('not resolved'), ...unresolved.map(({ sentence }) => `  ${sentence}`)].join('\n')
+}
+
+const FAULTS: readonly Column[] = [
+  { heading: 'if only this went wrong', align: 'left' },
+  { heading: 'it would be', align: 'left' },
+  { heading: 'left, % rms', align: 'right' },
+  { heading: 'BIC above best', align: 'right' },
+]
+
+const MOST_FAULTS = 6
+
+function faultsText({ single_faults, residual_rms }: Fit): string {
+  const rows = single_faults.slice(0, MOST_FAULTS).map(({ fault, parameters, residual_rms: left, delta_bic }) => [
+    fault,
+    Object.values(parameters)
+      .map((value) => Number(value.toPrecision(6)))
+      .join(', '),
+    fixed(100 * left, 4),
+    fixed(delta_bic, 1),
+  ])
+  const [best] = single_faults
+  const enough = best !== undefined && best.residual_rms < 1.2 * residual_rms
+  const verdict = enough
+    ? `${best.fault} alone explains the sample nearly as well as all parameters together`
+    : 'no single fault explains the sample as well as all parameters together'
+  return `${textTable(FAULTS, rows)}\n${verdict}`
+}

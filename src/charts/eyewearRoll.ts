@@ -3,7 +3,7 @@ import { linearAxis } from './axis.js'
 import { frameOptions, paperPainter } from './frame.js'
 import { painter } from './painter.js'
 import { panelAxes } from './panels.js'
-import { DEGREES, quantityText } from './quantity.js'
+import { DEGREES, numberText, type Quantity, quantityText } from './quantity.js'
 import { xyzToHex } from './screenColor.js'
 import { lineSeries } from './series.js'
 import { fontOf, seriesStyle, type Theme } from './theme.js'
@@ -13,11 +13,13 @@ export interface EyewearRollData {
   readonly notes?: readonly string[]
   /** Roll of the lens about the line of sight, ascending. */
   readonly rollRad: readonly number[]
+  /** What is left of the screen's light: luminance in cd/m², or a share. */
+  readonly brightness: Quantity
   readonly screens: readonly {
     readonly name: string
-    /** Through the lens, cd/m². */
-    readonly luminance: readonly number[]
-    /** CIEDE2000 from the color seen without the lens, at equal lightness. */
+    /** Through the lens, in stored units of `brightness`. */
+    readonly through: readonly number[]
+    /** CIE 1976 u′v′ distance from the color seen without the lens; NaN where there is no light to have one. */
     readonly colorShift: readonly number[]
     /** XYZ of the screen's white through the lens, Y = 1 for the brightest roll: the swatches under the axis. */
     readonly xyz?: readonly (readonly [number, number, number])[]
@@ -26,30 +28,37 @@ export interface EyewearRollData {
 
 const STRIP_PX = 12
 
-/** What polarized eyewear leaves of the lit screen: luminance and color against the lens's roll. */
+/** What polarized eyewear leaves of the lit screen: brightness and color against the lens's roll. */
 export function eyewearRoll(data: EyewearRollData, theme: Theme): ChartConfiguration {
-  const { screens } = data
+  const { screens, brightness } = data
   const rollDeg = data.rollRad.map((roll) => DEGREES.factor * roll)
   const strips = screens.flatMap(({ name, xyz }) => (xyz ? [{ name, xyz }] : []))
   return {
     type: 'scatter',
     data: {
-      datasets: screens.flatMap(({ name, luminance, colorShift }, i) => [
-        lineSeries(theme, name, rollDeg, luminance, seriesStyle(theme, i), 'luminance'),
+      datasets: screens.flatMap(({ name, through, colorShift }, i) => [
+        lineSeries(
+          theme,
+          name,
+          rollDeg,
+          through.map((value) => brightness.factor * value),
+          seriesStyle(theme, i),
+          'brightness',
+        ),
         lineSeries(theme, '', rollDeg, colorShift, seriesStyle(theme, i), 'shift'),
       ]),
     },
     options: {
       ...frameOptions(theme, {
         title: data.title,
-        notes: [...screens.map(worstText(data.rollRad)), ...(data.notes ?? [])],
+        notes: [...screens.map(worstText(data)), ...(data.notes ?? [])],
         hover: ({ parsed, dataset }) =>
-          `${Number((parsed.x ?? 0).toFixed(1))}°: ${(parsed.y ?? 0).toFixed(1)} ${dataset.label ? 'cd/m²' : 'ΔE00'}`,
+          `${Number((parsed.x ?? 0).toFixed(1))}°: ${numberText(parsed.y ?? 0)} ${dataset.label ? brightness.unit : 'Δu′v′'}`,
       }),
       scales: {
         ...panelAxes(theme, [
-          { id: 'luminance', quantity: { label: 'luminance', unit: 'cd/m²', factor: 1 }, min: 0 },
-          { id: 'shift', quantity: { label: 'color shift ΔE00', unit: '', factor: 1 }, min: 0 },
+          { id: 'brightness', quantity: brightness, min: 0 },
+          { id: 'shift', quantity: { label: 'color shift Δu′v′', unit: '', factor: 1 }, min: 0 },
         ]),
         x: linearAxis(theme, {
           title: 'roll of the lens (°)',
@@ -84,9 +93,9 @@ export function eyewearRoll(data: EyewearRollData, theme: Theme): ChartConfigura
   }
 }
 
-function worstText(rollRad: readonly number[]) {
-  return ({ name, luminance }: EyewearRollData['screens'][number]): string => {
-    const darkest = luminance.indexOf(Math.min(...luminance))
-    return `${name}: darkest ${quantityText({ unit: 'cd/m²', factor: 1 }, luminance[darkest])} at a roll of ${quantityText(DEGREES, rollRad[darkest])}`
+function worstText({ rollRad, brightness }: EyewearRollData) {
+  return ({ name, through }: EyewearRollData['screens'][number]): string => {
+    const darkest = through.indexOf(Math.min(...through))
+    return `${name}: darkest ${quantityText(brightness, through[darkest])} at a roll of ${quantityText(DEGREES, rollRad[darkest])}`
   }
 }

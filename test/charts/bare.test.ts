@@ -85,7 +85,12 @@ const bare = {
   ),
   poincare: poincare({ title: longTitle, ways: [{ name: 'in', states: [{ label: 'a', stokes: [0, 0, 0] }] }] }, PAPER),
   eyewearRoll: eyewearRoll(
-    { title: longTitle, rollRad: [0, 1], screens: [{ name: 'OLED', luminance: [0, 0], colorShift: [0, 0] }] },
+    {
+      title: longTitle,
+      rollRad: [0, 1],
+      brightness: METRIC_QUANTITIES.emission_transmittance,
+      screens: [{ name: 'OLED', through: [0, 0], colorShift: [0, 0] }],
+    },
     PAPER,
   ),
 }

@@ -181,11 +181,12 @@ const rollRad = steps(0, 180, 3).map((deg) => deg * DEGREE)
 export const eyewearRollData: EyewearRollData = {
   title: 'Invented dive computer behind a polarized lens',
   rollRad,
+  brightness: { label: 'luminance', unit: 'cd/m²', factor: 1 },
   screens: [
     {
       name: 'OLED',
-      luminance: rollRad.map((roll) => 150 + 60 * Math.cos(2 * roll - 0.4)),
-      colorShift: rollRad.map((roll) => 1.2 + 0.8 * Math.sin(roll) ** 2),
+      through: rollRad.map((roll) => 150 + 60 * Math.cos(2 * roll - 0.4)),
+      colorShift: rollRad.map((roll) => 0.004 + 0.003 * Math.sin(roll) ** 2),
       xyz: rollRad.map((roll) => {
         const y = 0.72 + 0.28 * Math.cos(2 * roll - 0.4)
         return [0.95 * y, y, 1.09 * y * (1 - 0.1 * Math.sin(roll) ** 2)]
@@ -193,8 +194,8 @@ export const eyewearRollData: EyewearRollData = {
     },
     {
       name: 'LCD',
-      luminance: rollRad.map((roll) => 2 + 240 * Math.cos(roll - 45 * DEGREE) ** 2),
-      colorShift: rollRad.map((roll) => 3 + 5 * Math.sin(roll - 45 * DEGREE) ** 4),
+      through: rollRad.map((roll) => 2 + 240 * Math.cos(roll - 45 * DEGREE) ** 2),
+      colorShift: rollRad.map((roll) => 0.01 + 0.02 * Math.sin(roll - 45 * DEGREE) ** 4),
       xyz: rollRad.map((roll) => {
         const y = Math.cos(roll - 45 * DEGREE) ** 2
         return [0.95 * y, y, 1.09 * y]

@@ -25,7 +25,6 @@ export interface Eyewear {
   readonly summary: {
     readonly darkest: EyewearRoll
     readonly brightest: EyewearRoll
-    /** Of the rolls that are not all but black (1 % of the brightest). */
     readonly largest_color_shift: EyewearRoll
   }
 }
@@ -41,8 +40,8 @@ export interface EyewearRoll {
   readonly luminance?: number
   /** X, Y, Z with Y = 100 for the screen without the lens. */
   readonly xyz: Xyz
-  /** CIE 1976 u'v' distance from the screen without the lens. */
-  readonly delta_uv: number
+  /** CIE 1976 u'v' distance from the screen without the lens; absent of rolls all but black (1 % of the brightest). */
+  readonly delta_uv?: number
 }
 
 /** Rolls darker than this share of the brightest have no color to speak of. */
@@ -59,7 +58,7 @@ export function eyewear(stack: Stack, { theta, phi, rollStep, lensLeakage = 0 }:
   const tristimulus = createTristimulus(stack, scene.wavelengthsNm)
   const bare = tristimulus((i) => stokes[i])
   const relative = (xyz: Xyz): Xyz => [(100 * xyz[0]) / bare[1], (100 * xyz[1]) / bare[1], (100 * xyz[2]) / bare[1]]
-  const rolls = rollAngles(rollStep).map((roll): EyewearRoll => {
+  const seen = rollAngles(rollStep).map((roll) => {
     // From the plane of incidence to the axis of the lens; y' lies clockwise of x' as the viewer sees it.
     const angle = 2 * (phi - roll)
     const [c, s] = [Math.cos(angle), Math.sin(angle)]
@@ -76,6 +75,8 @@ export function eyewear(stack: Stack, { theta, phi, rollStep, lensLeakage = 0 }:
       delta_uv: uvDistance(through, bare),
     }
   })
+  const visible = BLACK * Math.max(...seen.map(({ transmittance }) => transmittance))
+  const rolls = seen.map(({ delta_uv, ...roll }) => (roll.transmittance < visible ? roll : { ...roll, delta_uv }))
   return {
     title: stack.title,
     theta_deg: degrees(theta),
@@ -108,14 +109,11 @@ function createTristimulus(stack: Stack, wavelengthsNm: Float64Array): (light: (
 }
 
 function summarize(rolls: readonly EyewearRoll[]): Eyewear['summary'] {
-  const extreme = (among: readonly EyewearRoll[], better: (a: EyewearRoll, b: EyewearRoll) => boolean) =>
-    among.reduce((a, b) => (better(b, a) ? b : a))
-  const brightest = extreme(rolls, (a, b) => a.transmittance > b.transmittance)
-  const visible = rolls.filter(({ transmittance }) => transmittance >= BLACK * brightest.transmittance)
+  const extreme = (value: (roll: EyewearRoll) => number) => rolls.reduce((a, b) => (value(b) > value(a) ? b : a))
   return {
-    darkest: extreme(rolls, (a, b) => a.transmittance < b.transmittance),
-    brightest,
-    largest_color_shift: extreme(visible, (a, b) => a.delta_uv > b.delta_uv),
+    darkest: extreme(({ transmittance }) => -transmittance),
+    brightest: extreme(({ transmittance }) => transmittance),
+    largest_color_shift: extreme(({ delta_uv }) => delta_uv ?? -1),
   }
 }
 

@@ -96,11 +96,11 @@ describe.each(['LED-B3', 'LED-B5'] as const)('a film at 45° in front of an LCD 
 })
 
 describe('the color shift', () => {
-  it('is told of rolls that are not black', () => {
-    const stack = stackOf([retarder('front', 45, 275), polarizer(0)], { emission: emission('D65') })
-    const { rolls, summary } = eyewear(stack, { ...head, rollStep: 5 * DEG })
-    expect(summary.largest_color_shift.transmittance).toBeGreaterThan(0.01 * summary.brightest.transmittance)
-    expect(Math.max(...rolls.map((roll) => roll.delta_uv))).toBeGreaterThanOrEqual(summary.largest_color_shift.delta_uv)
+  it('is told of rolls that are not all but black', () => {
+    const stack = stackOf([polarizer(0)], { emission: emission('D65') })
+    const found = eyewear(stack, head)
+    expect(at(found, 90).delta_uv).toBeUndefined()
+    expect(at(found, 75).delta_uv).toBeCloseTo(0, 6)
   })
 
   it("is a distance in u'v': from the white point of D65 to the color through the lens", () => {

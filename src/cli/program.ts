@@ -25,6 +25,12 @@ export function createProgram(finish: (code: ExitCode) => void): Command {
   return program
 }
 
+const ARGUMENTS = {
+  stack: 'the stack file',
+  new: 'the file to be made',
+  folder: 'a stack file, or the folder of some',
+} as const
+
 function addVerb(program: Command, verb: Verb, finish: (code: ExitCode) => void): void {
   const command = program
     .command(verb.name)
@@ -34,7 +40,7 @@ function addVerb(program: Command, verb: Verb, finish: (code: ExitCode) => void)
     .showHelpAfterError(`See offblack ${verb.name} --help.`)
     .addHelpText('after', `\nExample:\n  offblack ${verb.example}`)
   if (verb.file !== undefined)
-    command.argument('<file>', verb.file === 'stack' ? 'the stack file' : 'the file to be made')
+    command.argument('<file>', ARGUMENTS[verb.file])
   for (const option of [...(verb.options ?? []), ...(verb.file === 'stack' ? sharedOptions() : [])])
     command.addOption(option)
   command.action(async (...given: unknown[]) => {

@@ -19,9 +19,15 @@ function startBar(label: string, stream: NodeJS.WriteStream): Progress {
   const options = { format, stream, hideCursor: true, clearOnComplete: true, gracefulExit: false, barsize: 24, fps: 8 }
   const bar = new SingleBar(options, Presets.shades_classic)
   bar.start(PARTS, 0, { left: '', note: '' })
+  // However the program ends, the terminal gets its cursor back.
+  const stop = (): void => bar.stop()
+  process.once('exit', stop)
   return {
     update: (done, note = '') => bar.update(Math.round(done * PARTS), { left: timeLeft(done), note }),
-    end: () => bar.stop(),
+    end: () => {
+      process.off('exit', stop)
+      stop()
+    },
   }
 }
 

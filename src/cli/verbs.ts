@@ -9,8 +9,8 @@ import { collected, wholeNumber } from './optionValues.js'
 export interface Verb {
   readonly name: string
   readonly summary: string
-  /** Takes a stack file, and with it the options that all such verbs share; `new` takes the file to be made. */
-  readonly file?: 'stack' | 'new'
+  /** Takes a stack file, and with it the options that all such verbs share; `new` takes the file to be made, `tune` a folder as well. */
+  readonly file?: 'stack' | 'new' | 'folder'
   readonly options?: readonly Option[]
   /** Arguments of `offblack`. */
   readonly example: string
@@ -63,6 +63,19 @@ export const VERBS: readonly Verb[] = [
     ],
     example: 'fit stacks/dive-computer.stack.yaml --measured stacks/measured/dive-computer.csv',
     load: () => import('./verbs/fit.js'),
+  },
+  {
+    name: 'tune',
+    summary: 'turn the films by hand, on a local page',
+    file: 'folder',
+    options: [
+      new Option('--port <number>', 'to listen on, on this machine only; 0 takes a free one')
+        .argParser(wholeNumber(0, 65_535))
+        .default(0),
+      new Option('--quiet', 'print the address alone'),
+    ],
+    example: 'tune stacks',
+    load: () => import('./verbs/tune.js'),
   },
   {
     name: 'check',

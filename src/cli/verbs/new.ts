@@ -1,8 +1,8 @@
 import { existsSync } from 'node:fs'
 import { InputError } from '../../stack/problem.js'
+import { STARTER_FILE } from '../../stack/starterFile.js'
 import type { Context } from '../context.js'
 import { EXIT, type ExitCode } from '../exitCode.js'
-import { STARTER_STACK } from '../starterStack.js'
 import { writeWhole } from '../writeWhole.js'
 
 export async function run({ file, terminal }: Context): Promise<ExitCode> {
@@ -12,7 +12,7 @@ export async function run({ file, terminal }: Context): Promise<ExitCode> {
       { severity: 'error', code: 'file_exists', path: '', file, message, next: 'choose another name' },
     ])
   }
-  await writeWhole(file, STARTER_STACK)
+  await writeWhole(file, STARTER_FILE)
   terminal.note(`${file} written; next: offblack evaluate ${file}\n`)
   return EXIT.done
 }

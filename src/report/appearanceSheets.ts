@@ -1,4 +1,4 @@
-import { offStateColor } from '../charts/offStateColor.js'
+import { type OffStateColorData, offStateColor } from '../charts/offStateColor.js'
 import { type ReflectanceSpectrumData, reflectanceSpectrum } from '../charts/reflectanceSpectrum.js'
 import { PAPER } from '../charts/theme.js'
 import { illuminantAt } from '../color/illuminant.js'
@@ -29,7 +29,8 @@ export function appearanceSheets(stack: Stack, designs: readonly NamedEvaluation
   return [...spectra, colorSheet(stack, designs)]
 }
 
-function spectrumData(stack: Stack, designs: readonly NamedEvaluation[], k: number): ReflectanceSpectrumData {
+/** Seen from the k-th direction. */
+export function spectrumData(stack: Stack, designs: readonly NamedEvaluation[], k: number): ReflectanceSpectrumData {
   const after = designs[designs.length - 1].evaluation.directions[k]
   const { wavelength_nm, front_reflectance } = after.spectrum
   const wavelengths = Float64Array.from(wavelength_nm)
@@ -53,11 +54,15 @@ function spectrumData(stack: Stack, designs: readonly NamedEvaluation[], k: numb
 }
 
 function colorSheet(stack: Stack, designs: readonly NamedEvaluation[]): Sheet {
+  return { name: 'off-state-color', chart: offStateColor(colorData(stack, designs), PAPER), width: 720, height: 760 }
+}
+
+export function colorData(stack: Stack, designs: readonly NamedEvaluation[]): OffStateColorData {
   const after = designs[designs.length - 1].evaluation.directions
   const before = designs.length > 1 ? designs[0].evaluation.directions : undefined
   const limits = stack.limits.flatMap(({ metric, max }) => (metric === 'chroma' && max !== undefined ? [max] : []))
   const { observer, illuminant } = stack.conditions
-  const data = {
+  return {
     title: `${stack.title}: color of the off-state`,
     notes: [`CIELAB, ${illuminantText(illuminant)}, ${observer}° observer`],
     ...(limits.length > 0 && { limitChroma: Math.min(...limits) }),
@@ -67,7 +72,6 @@ function colorSheet(stack: Stack, designs: readonly NamedEvaluation[]): Sheet {
       ...(before !== undefined && { before: aStarBStar(before[k]) }),
     })),
   }
-  return { name: 'off-state-color', chart: offStateColor(data, PAPER), width: 720, height: 760 }
 }
 
 function aStarBStar({ lab }: DirectionEvaluation): [number, number] {

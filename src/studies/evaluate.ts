@@ -49,8 +49,8 @@ export interface LimitEvaluation extends AskedLimit {
   readonly met: boolean
 }
 
-export function evaluate(stack: Stack): Evaluation {
-  const scene = new Scene(stack)
+/** `scene` is one made for the same conditions, of an earlier state of the stack, say: what did not change is kept. */
+export function evaluate(stack: Stack, scene: Scene = new Scene(stack)): Evaluation {
   return {
     title: stack.title,
     directions: stack.conditions.directions.map(({ theta, phi }) =>

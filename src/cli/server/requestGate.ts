@@ -9,7 +9,8 @@ import { Refusal } from './refusal.js'
  */
 export function checkSender({ headers }: IncomingMessage, port: number): void {
   const hosts = [`127.0.0.1:${port}`, `localhost:${port}`]
-  if (headers.host === undefined || !hosts.includes(headers.host)) throw new Refusal(421, 'this server has another name')
+  if (headers.host === undefined || !hosts.includes(headers.host))
+    throw new Refusal(421, 'this server has another name')
   const { origin } = headers
   if (origin !== undefined && origin !== `http://${headers.host}`) throw new Refusal(403, 'another origin')
   const site = headers['sec-fetch-site']
@@ -24,6 +25,9 @@ export function checkToken({ headers }: IncomingMessage, token: string): void {
   const given = headers['x-offblack-token']
   const digest = (text: string): Buffer => createHash('sha256').update(text).digest()
   if (typeof given !== 'string' || !timingSafeEqual(digest(given), digest(token))) {
-    throw new Refusal(401, 'the page does not have the token of this server: open the address that offblack tune printed')
+    throw new Refusal(
+      401,
+      'the page does not have the token of this server: open the address that offblack tune printed',
+    )
   }
 }

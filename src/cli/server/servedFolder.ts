@@ -52,7 +52,8 @@ export class ServedFolder {
   /** The stack file with all the files it names. */
   async open(file: string): Promise<ServedStack> {
     const path = this.existing(file)
-    if (path === undefined || !STACK_FILE.test(file)) throw new Refusal(404, `there is no stack file ${file} in the folder`)
+    if (path === undefined || !STACK_FILE.test(file))
+      throw new Refusal(404, `there is no stack file ${file} in the folder`)
     const { files, record } = recordingFiles(this.filesAbout(file))
     try {
       const text = readText(path)

@@ -63,7 +63,12 @@ function addressOf({ url }: IncomingMessage): URL {
   }
 }
 
-function sendPage({ page }: TuneServerSetup, request: IncomingMessage, response: ServerResponse, pathname: string): void {
+function sendPage(
+  { page }: TuneServerSetup,
+  request: IncomingMessage,
+  response: ServerResponse,
+  pathname: string,
+): void {
   if (request.method !== 'GET' && request.method !== 'HEAD') throw new Refusal(405, 'the page is only read')
   const file = page.get(pathname)
   if (file === undefined) throw new Refusal(404, 'there is nothing here')

@@ -27,7 +27,9 @@ export async function run({ file, options, terminal }: Context<TuneOptions>): Pr
   })
   const opened = name === undefined ? '' : `file=${encodeURIComponent(name)}&`
   terminal.print(`http://127.0.0.1:${port}/#${opened}token=${token}\n`)
-  terminal.note(`Open this address in a browser on this machine. It serves the stack files in ${folder}; Ctrl-C ends it.\n`)
+  terminal.note(
+    `Open this address in a browser on this machine. It serves the stack files in ${folder}; Ctrl-C ends it.\n`,
+  )
   await interrupted()
   server.close()
   server.closeAllConnections()

@@ -2,9 +2,10 @@
  * The lit screen through polarized eyewear: luminance and color at every roll angle of the lens. A retarder in front of the
  * polarizer is just another layer of the stack.
  */
-import { Scene } from '../appearance/scene.js'
+import { type Look, Scene } from '../appearance/scene.js'
 import { illuminantAt } from '../color/illuminant.js'
 import { createColorWeights } from '../color/weights.js'
+import { spectrumToXyz } from '../color/xyz.js'
 import type { Direction, Stack } from '../stack/stack.js'
 import { degrees } from './evaluate.js'
 
@@ -50,29 +51,18 @@ const BLACK = 0.01
 /** Needs a mirror panel, whose emission the stack file describes. */
 export function eyewear(stack: Stack, { theta, phi, rollStep, lensLeakage = 0 }: EyewearQuestion): Eyewear {
   const scene = new Scene(stack)
-  const n = scene.wavelengthsNm.length
   const look = scene.look(stack, theta, phi)
-  const stokes = new Float64Array(4 * n)
-  look.solver.emissionStokes(stokes)
+  const light = polarizedXyz(stack, scene, look)
   const luminance = stack.emission.luminance * scene.emissionShare(stack, look)
-  const tristimulus = createTristimulus(stack, scene.wavelengthsNm)
-  const bare = tristimulus((i) => stokes[i])
-  const relative = (xyz: Xyz): Xyz => [(100 * xyz[0]) / bare[1], (100 * xyz[1]) / bare[1], (100 * xyz[2]) / bare[1]]
   const seen = rollAngles(rollStep).map((roll) => {
-    // From the plane of incidence to the axis of the lens; y' lies clockwise of x' as the viewer sees it.
-    const angle = 2 * (phi - roll)
-    const [c, s] = [Math.cos(angle), Math.sin(angle)]
-    const through = tristimulus((i) => {
-      const [all, linear] = [stokes[i], c * stokes[n + i] + s * stokes[2 * n + i]]
-      return ((1 + lensLeakage) * all + (1 - lensLeakage) * linear) / 2
-    })
-    const transmittance = through[1] / bare[1]
+    const xyz = throughLens(light, phi - roll, lensLeakage)
+    const transmittance = xyz[1] / 100
     return {
       roll_deg: degrees(roll),
       transmittance,
       ...(luminance > 0 && { luminance: luminance * transmittance }),
-      xyz: relative(through),
-      delta_uv: uvDistance(through, bare),
+      xyz,
+      delta_uv: uvDistance(xyz, light[0]),
     }
   })
   const visible = BLACK * Math.max(...seen.map(({ transmittance }) => transmittance))
@@ -81,7 +71,7 @@ export function eyewear(stack: Stack, { theta, phi, rollStep, lensLeakage = 0 }:
     title: stack.title,
     theta_deg: degrees(theta),
     phi_deg: degrees(phi),
-    bare_xyz: relative(bare),
+    bare_xyz: light[0],
     rolls,
     summary: summarize(rolls),
   }
@@ -92,20 +82,23 @@ function rollAngles(step: number): number[] {
   return Array.from({ length: count }, (_, k) => (k * Math.PI) / count)
 }
 
-/** X, Y, Z of light given relative to what the panel emits. */
-function createTristimulus(stack: Stack, wavelengthsNm: Float64Array): (light: (i: number) => number) => Xyz {
+/** X, Y, Z of the Stokes components S0, S1, S2 of the light to the eye, Y of S0 being 100. */
+function polarizedXyz(stack: Stack, { wavelengthsNm }: Scene, { solver }: Look): [Xyz, Xyz, Xyz] {
+  const n = wavelengthsNm.length
+  const stokes = new Float64Array(4 * n)
+  solver.emissionStokes(stokes)
   const emitted = illuminantAt(stack.emission.spectrum, wavelengthsNm)
   const weights = createColorWeights(wavelengthsNm, stack.conditions.observer, emitted)
-  return (light) => {
-    const sum: [number, number, number] = [0, 0, 0]
-    for (let i = 0; i < wavelengthsNm.length; i++) {
-      const value = light(i)
-      sum[0] += weights.x[i] * value
-      sum[1] += weights.y[i] * value
-      sum[2] += weights.z[i] * value
-    }
-    return sum
-  }
+  const [s0, s1, s2] = [0, 1, 2].map((k) => spectrumToXyz(weights, stokes.subarray(k * n, (k + 1) * n)))
+  const relative = ([x, y, z]: Xyz): Xyz => [(100 * x) / s0[1], (100 * y) / s0[1], (100 * z) / s0[1]]
+  return [relative(s0), relative(s1), relative(s2)]
+}
+
+/** `angle` from the axis of the lens to the plane of incidence; y' lies clockwise of x' as the viewer sees it. */
+function throughLens([s0, s1, s2]: readonly [Xyz, Xyz, Xyz], angle: number, leakage: number): Xyz {
+  const [c, s] = [Math.cos(2 * angle), Math.sin(2 * angle)]
+  const through = (k: 0 | 1 | 2) => ((1 + leakage) * s0[k] + (1 - leakage) * (c * s1[k] + s * s2[k])) / 2
+  return [through(0), through(1), through(2)]
 }
 
 function summarize(rolls: readonly EyewearRoll[]): Eyewear['summary'] {

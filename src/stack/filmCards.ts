@@ -4,10 +4,11 @@ import { exclusiveFaults, partnersOf, rivalsOf } from './exclusiveFields.js'
 import { isMapping, type PathKey } from './fault.js'
 import { treeFaults } from './plainTree.js'
 import type { Problem } from './problem.js'
-import { CARD_KEYS, type filmCardSchema } from './schema/filmCard.js'
+import { CARD_KEYS, filmCardSchema } from './schema/filmCard.js'
 import { allowedText, schemaFaults } from './schemaFaults.js'
 import { Source } from './source.js'
 import { besideFile, type StackFiles } from './stackFiles.js'
+import type { TableFiles } from './tableFiles.js'
 
 /** A card as it stands in its file. */
 export interface RawCard {
@@ -23,10 +24,11 @@ export interface RawCard {
 /** Reads each card once. */
 export class FilmCards {
   private readonly cards = new Map<string, RawCard | undefined>()
+  private schema: ReturnType<typeof filmCardSchema> | undefined
 
   constructor(
     private readonly files: StackFiles,
-    private readonly schema: ReturnType<typeof filmCardSchema>,
+    private readonly tables: TableFiles,
     private readonly shown: (path: string) => string,
   ) {}
 
@@ -64,6 +66,7 @@ export class FilmCards {
   }
 
   private schemaFaultsOf(own: unknown, raw: unknown) {
+    this.schema ??= filmCardSchema(this.tables)
     const parsed: z.ZodSafeParseResult<unknown> = this.schema.safeParse(isMapping(raw) ? own : raw, {
       error: allowedText,
     })

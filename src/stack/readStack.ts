@@ -11,7 +11,6 @@ import { applyOverride, overrideProblem, readOverrides } from './overrides.js'
 import { type FilmedLayer, type Origins, placeFault } from './placing.js'
 import { treeFaults } from './plainTree.js'
 import type { Problem } from './problem.js'
-import { filmCardSchema } from './schema/filmCard.js'
 import type { RawCompare } from './schema/questions.js'
 import { stackSchema } from './schema/stackSchema.js'
 import { indexFaults } from './sense/indices.js'
@@ -70,7 +69,7 @@ class StackReader {
   ) {
     const shown = (path: string) => besideFile(file, path)
     this.tables = new TableFiles(files, shown)
-    this.cards = new FilmCards(files, filmCardSchema(this.tables), shown)
+    this.cards = new FilmCards(files, this.tables, shown)
     this.schema = stackSchema(this.tables)
   }
 

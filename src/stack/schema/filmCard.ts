@@ -1,13 +1,14 @@
 import * as z from 'zod'
 import type { TableFiles } from '../tableFiles.js'
 import { filmFields } from './layer.js'
+import { indexSchema } from './refractiveIndex.js'
 
 /** Keys of a card that say something about the film on offer, not about its optics. */
 export const CARD_KEYS = ['format', 'name', 'maker', 'price_per_m2', 'notes'] as const
 
 /** One film on offer: the fields of a layer without id, angle and film. */
 export function filmCardSchema(files: TableFiles) {
-  const fields = filmFields(files)
+  const fields = filmFields(files, indexSchema(files))
   const head = {
     format: z.literal(1).optional().meta({ description: 'Version of this file format.' }),
     name: z

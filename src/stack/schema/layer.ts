@@ -5,7 +5,7 @@ import { retardanceFault, withScalarRetardance } from '../measuredRetardance.js'
 import type { Layer } from '../stack.js'
 import type { TableFiles } from '../tableFiles.js'
 import { numberSchema, quantitySchema, report } from './quantity.js'
-import { DEFAULT_INDEX, indexSchema } from './refractiveIndex.js'
+import { DEFAULT_INDEX, type indexSchema } from './refractiveIndex.js'
 import { fileTable, inlineTable, spectrumSchema } from './spectrum.js'
 
 /** Layers thinner than this are coherent unless the file says otherwise, nm. */
@@ -84,17 +84,17 @@ const film = z
 const angle = (description: string) => quantitySchema(FIELD_LIMITS.azimuth, description, '45 deg').prefault('0 deg')
 
 /** What a film itself has, by kind: the fields a film card may hold. */
-export function filmFields(files: TableFiles) {
+export function filmFields(files: TableFiles, index: ReturnType<typeof indexSchema>) {
   const transmittance = (name: 'single_transmittance' | 'transmission_axis_transmittance', text: string, say: string) =>
     spectrumSchema(FIELD_LIMITS[name], files, text, [say]).optional()
   const crossed = (text: string) =>
     spectrumSchema(FIELD_LIMITS.absorption_axis_transmittance, files, text, ['0.02 %']).optional()
   return {
-    isotropic: { thickness, coherent, index: indexSchema(files, 'Refractive index.') },
+    isotropic: { thickness, coherent, index: index('Refractive index.') },
     retarder: {
       thickness,
       coherent,
-      index: indexSchema(files, 'Mean of the three principal indices.').prefault(DEFAULT_INDEX.retarder),
+      index: index('Mean of the three principal indices.').prefault(DEFAULT_INDEX.retarder),
       retardance: spectrumSchema(
         FIELD_LIMITS.retardance,
         files,
@@ -108,7 +108,7 @@ export function filmFields(files: TableFiles) {
     polarizer: {
       thickness,
       coherent,
-      index: indexSchema(files, 'Refractive index of the host; its absorption comes from the transmittances.').prefault(
+      index: index('Refractive index of the host; its absorption comes from the transmittances.').prefault(
         DEFAULT_INDEX.polarizer,
       ),
       single_transmittance: transmittance(
@@ -130,11 +130,7 @@ export function filmFields(files: TableFiles) {
       thickness,
       coherent,
       indices: z
-        .tuple([
-          indexSchema(files, 'Along the first axis.'),
-          indexSchema(files, 'Along the second axis.'),
-          indexSchema(files, 'Along the third axis.'),
-        ])
+        .tuple([index('Along the first axis.'), index('Along the second axis.'), index('Along the third axis.')])
         .meta({ description: 'The three principal indices.', examples: [[1.65, 1.52, 1.58]] }),
       tilt: quantitySchema(
         FIELD_LIMITS.tilt,
@@ -164,8 +160,8 @@ function dispersionSchema(files: TableFiles) {
 }
 
 /** The four kinds of layer. */
-export function layerSchema(files: TableFiles) {
-  const fields = filmFields(files)
+export function layerSchema(files: TableFiles, index: ReturnType<typeof indexSchema>) {
+  const fields = filmFields(files, index)
   const head = { id: idSchema, film }
   const kinds = [
     z.strictObject({ ...head, kind: z.literal('isotropic'), ...fields.isotropic }).meta({ title: 'Isotropic layer' }),

@@ -11,9 +11,9 @@ export const DEFAULT_INDEX = { retarder: 1.55, polarizer: 1.5, mirror: 1.5 } as 
 
 const FORMS = 'a number, {n, k}, {cauchy_nm: [A, B, C]}, {material: name}, {formula: "…"} or {file: nk.csv}'
 
-/** Every way to say a refractive index. */
-export function indexSchema(files: TableFiles, description: string) {
-  return z
+/** Every way to say a refractive index; the one schema is used under many descriptions. */
+export function indexSchema(files: TableFiles) {
+  const law = z
     .union(
       [
         numberSchema(FIELD_LIMITS.index, 'The same index at all wavelengths.', 1.5),
@@ -26,7 +26,7 @@ export function indexSchema(files: TableFiles, description: string) {
       { error: () => FORMS },
     )
     .transform((law): IndexLaw => law)
-    .meta({ description })
+  return (description: string) => law.meta({ description })
 }
 
 function complexSchema(files: TableFiles) {

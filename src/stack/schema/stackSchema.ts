@@ -8,6 +8,7 @@ import { limitSchema } from './metric.js'
 import { panelSchema } from './panel.js'
 import { quantitySchema } from './quantity.js'
 import { compareSchema, fitSchema, optimizeSchema, toleranceSchema } from './questions.js'
+import { indexSchema } from './refractiveIndex.js'
 
 export const MOST_LAYERS = 2000
 const MOST_LEVELS = 20
@@ -31,6 +32,7 @@ export const STACK_KEYS: readonly string[] = [
 
 /** The stack file. CSV files it names are read while it is parsed; film cards are laid under their layers before. */
 export function stackSchema(files: TableFiles) {
+  const index = indexSchema(files)
   return z
     .strictObject({
       format: z.literal(1).meta({ description: 'Version of this file format.', examples: [1] }),
@@ -42,10 +44,10 @@ export function stackSchema(files: TableFiles) {
       notes: z.string().max(20_000).optional().meta({ description: 'Free text.' }),
       conditions: conditionsSchema(files),
       layers: z
-        .array(layerSchema(files))
+        .array(layerSchema(files, index))
         .max(MOST_LAYERS)
         .meta({ description: 'From the viewer’s side to the panel.' }),
-      panel: panelSchema(files),
+      panel: panelSchema(files, index),
       emission: emissionSchema(files),
       ambient: z
         .array(quantitySchema(CONDITION_LIMITS.illuminance, 'Illuminance.', '500 lx'))

@@ -4,7 +4,6 @@ import { sensitivityBars } from '../charts/sensitivityBars.js'
 import { PAPER } from '../charts/theme.js'
 import { parseMetricKey } from '../studies/metricKey.js'
 import type { Tolerance } from '../studies/tolerance.js'
-import { given } from './decimals.js'
 import { metricKeyLabel } from './metricKeyText.js'
 import type { Sheet } from './sheet.js'
 

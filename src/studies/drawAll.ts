@@ -1,6 +1,6 @@
-import { type DrawRange, drawRanges } from './drawRanges.js'
+import { drawRanges } from './drawRanges.js'
 import type { Hooks } from './hooks.js'
-import type { ParallelMap } from './parallel.js'
+import { leadingResults, type ParallelMap } from './parallel.js'
 import { stageHooks } from './stageHooks.js'
 import { type DrawnBlock, type DrawnStack, toleranceBlock } from './toleranceBlock.js'
 
@@ -10,7 +10,7 @@ const WAVE = 20_000
 /** Makes the question's draws and passes them on in their order, block by block, up to where it is stopped. */
 export async function drawAll(
   shared: DrawnStack,
-  take: (block: DrawnBlock, range: DrawRange) => void | Promise<void>,
+  take: (block: DrawnBlock) => void | Promise<void>,
   hooks: Hooks,
   map: ParallelMap,
 ): Promise<void> {
@@ -19,9 +19,8 @@ export async function drawAll(
     const to = Math.min(samples, from + WAVE)
     const ranges = drawRanges(from, to)
     const blocks = await map(toleranceBlock, shared, ranges, stageHooks(hooks, from / samples, to / samples))
-    for (const [k, block] of blocks.entries()) {
-      if (block === undefined) return
-      await take(block, ranges[k])
-    }
+    const made = leadingResults(blocks)
+    for (const block of made) await take(block)
+    if (made.length < ranges.length) return
   }
 }

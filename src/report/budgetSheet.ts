@@ -2,6 +2,7 @@ import { budgetBars } from '../charts/budgetBars.js'
 import { METRIC_QUANTITIES, quantityText } from '../charts/quantity.js'
 import { PAPER } from '../charts/theme.js'
 import type { Budget } from '../studies/budget.js'
+import { BUDGET_LABELS } from './budgetLabels.js'
 import { given } from './decimals.js'
 import type { Sheet } from './sheet.js'
 
@@ -14,7 +15,7 @@ export function budgetSheet({ title, theta_deg, phi_deg, total, ideal, rest, ter
     metric,
     total,
     terms: terms.map(({ name, alone, if_removed }) => ({
-      name: name.replaceAll('_', ' '),
+      name: BUDGET_LABELS[name],
       alone,
       ifRemoved: if_removed,
     })),

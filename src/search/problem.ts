@@ -1,0 +1,33 @@
+import type { Objective, ObjectiveWithGradient } from './result.js'
+import type { Variable } from './variables.js'
+
+/** What a search is asked: functions of x, one number per variable in the variable's own unit. */
+export interface SearchProblem {
+  readonly variables: readonly Variable[]
+  readonly objective: Objective
+  /** Used by the polish of an unconstrained problem, where given. */
+  readonly objectiveWithGradient?: ObjectiveWithGradient
+  /** One number per constraint, in a unit of its own: met where <= 0, else how far it is missed. Always the same count. */
+  readonly constraints?: (x: Float64Array) => readonly number[]
+  /** A cheaper stand-in for the objective, by which starts are chosen and nothing else. */
+  readonly screen?: Objective
+}
+
+/** A point with what is known of it. */
+export interface Candidate {
+  readonly x: Float64Array
+  readonly value: number
+  /** Largest constraint missed; 0 where all are met. */
+  readonly violation: number
+}
+
+/** Whatever its value, a point that misses a constraint never beats one that meets them all. */
+export function isBetter(a: Candidate, b: Candidate): boolean {
+  if (a.violation !== b.violation) return a.violation < b.violation
+  return a.value < b.value
+}
+
+export function violationOf(constraints: readonly number[]): number {
+  // A constraint that is not a number is not met.
+  return constraints.reduce((worst, c) => (Number.isNaN(c) ? Number.POSITIVE_INFINITY : Math.max(worst, c)), 0)
+}

@@ -4,6 +4,7 @@
  */
 import { Option } from 'commander'
 import type { VerbModule } from './context.js'
+import { directionOptions } from './directionOptions.js'
 import { collected, wholeNumber } from './optionValues.js'
 
 export interface Verb {
@@ -36,6 +37,14 @@ export const VERBS: readonly Verb[] = [
     ],
     example: 'optimize stacks/dive-computer.stack.yaml --out out',
     load: () => import('./verbs/optimize.js'),
+  },
+  {
+    name: 'budget',
+    summary: 'where does the remaining light come from?',
+    file: 'stack',
+    options: directionOptions(),
+    example: 'budget stacks/dive-computer.stack.yaml --theta 30deg --phi 90deg',
+    load: () => import('./verbs/budget.js'),
   },
   {
     name: 'compare',

@@ -202,7 +202,7 @@ function lawFields(
       path,
       ...measured('index'),
       get: (owner) => parts(owner).n as number,
-      set: (owner, value) => write(owner, value),
+      set: (owner, value) => write(owner, typeof read(owner) === 'number' ? value : { ...parts(owner), n: value }),
     }
     return [whole, ...real, imaginary]
   }

@@ -23,7 +23,7 @@ export function applyToText(
     (data, { at, value }) => change(withCardField(data, at, stack), at, value),
     raw,
   )
-  const after = Object.entries(values).reduce((data, [path, value]) => {
+  const after = byDepth(Object.entries(values)).reduce((data, [path, value]) => {
     const at = placeOf(path.split('.'), data)
     const limits = limitsOfPath(path)
     if (!Array.isArray(at) || limits === undefined) throw new Error(`not a parameter of this stack: ${path}`)
@@ -37,6 +37,12 @@ export function applyToText(
     if ('fault' in result) throw new Error(`${at.join('.')}: ${result.fault.message}`)
     return result.raw
   }
+}
+
+/** An index before its k, which makes a pair of it. */
+function byDepth(entries: [string, number][]): [string, number][] {
+  const depth = ([path]: [string, number]) => path.split('.').length
+  return entries.sort((a, b) => depth(a) - depth(b))
 }
 
 /** A path into a field that the layer has from its film card: the whole field comes onto the layer. */

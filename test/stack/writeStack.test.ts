@@ -167,7 +167,7 @@ describe('the starter file', () => {
   it('reads back what is written into it, to 1e-12, for any parameters', async () => {
     const stack = await stackOf(STARTER_FILE)
     const parameters = parameterPaths(stack).filter(
-      ({ path }) => !/index\.n$|^(polarizer|half)\.(single|polariz|nz|retardance)/.test(path),
+      ({ path }) => !/index\.n$|rth$|^polarizer\.(single|polariz)/.test(path),
     )
     const changes = fc.dictionary(
       fc.constantFrom(...parameters.map(({ path }) => path)),
@@ -183,11 +183,9 @@ describe('the starter file', () => {
         )
         const read = await stackOf(applyToText(STARTER_FILE, stack, values))
         const wanted = setParameters(stack, values)
-        for (const path of Object.keys(values)) {
-          const [got, want] = [getParameter(read, path), getParameter(wanted, path)]
-          expect(Math.abs(got - want)).toBeLessThanOrEqual(1e-12 * Math.abs(want))
+        for (const { path, value } of parameterPaths(wanted)) {
+          expect(Math.abs(getParameter(read, path) - value)).toBeLessThanOrEqual(1e-12 * Math.abs(value))
         }
-        expect(parameterPaths(read).map(({ path }) => path)).toEqual(parameterPaths(wanted).map(({ path }) => path))
       }),
       { seed: 20, numRuns: 60 },
     )

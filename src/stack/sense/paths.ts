@@ -11,9 +11,28 @@ export function pathFaults(sense: Sense): PlacedFault[] {
   const varied = VARIED.flatMap((question) => {
     const vary = valueAt(sense.raw, [question, 'vary'])
     const paths = isMapping(vary) ? Object.keys(vary) : []
-    return paths.flatMap((path) => placed(pathFault(path, sense), [question, 'vary', path], true))
+    const unknown = paths.flatMap((path) => placed(pathFault(path, sense), [question, 'vary', path], true))
+    return [...unknown, ...sameFaults(paths, [question, 'vary'])]
   })
   return [...varied, ...togetherFaults(sense)]
+}
+
+/** Endings of paths that mean the same of a layer. */
+const SAME = [
+  ['rth', 'nz'],
+  ['index.n', 'index'],
+] as const
+
+function sameFaults(paths: readonly string[], base: readonly PathKey[]): PlacedFault[] {
+  return paths.flatMap((path) =>
+    SAME.flatMap(([ending, other]): PlacedFault[] => {
+      const twin = path.slice(0, -ending.length) + other
+      if (!path.endsWith(`.${ending}`) || !paths.includes(twin)) return []
+      const message = 'two paths move the same quantity'
+      const received = `${twin}, ${path}`
+      return [{ at: [...base, path], key: true, code: 'exclusive', message, received, next: 'remove one of them' }]
+    }),
+  )
 }
 
 function placed(fault: Fault | undefined, at: readonly PathKey[], key: boolean): PlacedFault[] {

@@ -11,8 +11,7 @@
  * evaluated: the answer meets them to the last digit, at a cost of multiplier × hair.
  */
 
-import type { SimplexOptions } from './nelderMead.js'
-import { nelderMead } from './nelderMead.js'
+import { nelderMead, type SimplexOptions } from './nelderMead.js'
 import { type Candidate, isBetter, type SearchProblem, violationOf } from './problem.js'
 import { DEFAULT_MAX_EVALUATIONS, DEFAULT_TOLERANCE, type Reason, resolution, type SearchResult } from './result.js'
 

@@ -30,6 +30,8 @@ import { Space, type Variable } from './variables.js'
 export interface GlobalOptions extends SearchOptions {
   /** Of the Sobol' points; default 1. The same seed gives the same digits. */
   readonly seed?: number
+  /** Most evaluations of the objective; default 20,000. */
+  readonly maxEvaluations?: number
   /** A point in hand, which is polished first. */
   readonly start?: ArrayLike<number>
   /** Families are kept whose value is within this share of the best's magnitude; default 0.05. */
@@ -40,7 +42,10 @@ export interface GlobalOptions extends SearchOptions {
   readonly progress?: (done: number, best: Candidate) => void
 }
 
-/** `x`, `value` and `violation` are those of `families[0]`; `iterations` counts rounds. */
+/**
+ * `x`, `value` and `violation` are those of the best point evaluated: `families[0]`, but where the search was broken off before its
+ * first polish. `iterations` counts rounds.
+ */
 export interface GlobalResult extends SearchResult {
   /** Largest constraint missed by the best; 0 where all are met. */
   readonly violation: number
@@ -83,7 +88,7 @@ const RIVAL_MARGIN = 0.01
 const WANTED_COVERAGE = 0.95
 /**
  * … or when so many starts came to the best value: the rule for a valley of equal designs, which has no number. With 14, all of
- * 120 runs on film pairs (three boxes, 40 seeds) found the best of their basins; with 10, two did not.
+ * 120 runs on film pairs (three boxes, 40 seeds) found the best of their basins; with 10, one did not.
  */
 const ENOUGH_HITS = 14
 /** Tolerance of the first polish as a share of the sample's spread; edges of the simplices as shares of the ranges. */
@@ -159,7 +164,6 @@ class Multistart {
     const { combinations } = this.startPoints
     const first = start === undefined ? [] : [this.space.nearest(start)]
     for (const x of first) this.sample.markStarted(x)
-    await this.polishRoughly(first)
     if (this.space.continuous.length === 0 && combinations !== undefined) {
       await this.polishRoughly(combinations.map((_, k) => this.startPoints.point(k)))
       return true
@@ -168,7 +172,7 @@ class Multistart {
     while (this.mayExplore(share)) {
       this.rounds++
       await this.screenMore()
-      await this.polishRoughly(this.sample.promising(STARTS_PER_ROUND))
+      await this.polishRoughly([...first.splice(0), ...this.sample.promising(STARTS_PER_ROUND)])
       if (this.basinsAreKnown()) return true
     }
     return false
@@ -190,7 +194,7 @@ class Multistart {
   private async polishRoughly(starts: readonly Float64Array[]): Promise<void> {
     const tolerance = Math.max(this.tolerance, Math.min(LOOSEST_TOLERANCE, FIRST_TOLERANCE * this.sample.spread()))
     this.slack = ROUGHNESS * FIRST_TOLERANCE * this.sample.spread()
-    for (const end of await this.ledger.polish(starts, tolerance, FIRST_STEP, this.exploring)) {
+    for (const end of await this.ledger.polish(starts, tolerance, FIRST_STEP, this.exploring, true)) {
       if (end !== undefined) this.families.add(end)
     }
     const { best, evaluations } = this.ledger
@@ -207,10 +211,10 @@ class Multistart {
 
   /** Where the combinations of listed values are too many to sample each: one value at a time, as long as that helps. */
   private async exchangeListed(): Promise<void> {
-    for (let before = Number.POSITIVE_INFINITY; this.mayExplore(); ) {
+    for (let before: Candidate | undefined; this.mayExplore(); ) {
       const { best } = this.ledger
-      if (best === undefined || !(best.value < before)) return
-      before = best.value
+      if (best === undefined || best === before) return
+      before = best
       const neighbors = await this.ledger.screen(this.startPoints.exchanges(best.x))
       neighbors.sort((a, b) => a.violation - b.violation || a.value - b.value)
       await this.polishRoughly(neighbors.slice(0, STARTS_PER_ROUND).map(({ x }) => x))

@@ -20,8 +20,10 @@ import { isHeld, jacobianAt, type ResidualProblem } from './residualProblem.js'
 import type { Reason, SearchOptions, SearchResult } from './result.js'
 import { Space } from './variables.js'
 
-/** Here the tolerance is a share of the sum of squares; default 1e-12. */
-export type LeastSquaresOptions = SearchOptions
+export interface LeastSquaresOptions extends SearchOptions {
+  /** Of the sum of squares, the share that a step must promise to be tried; default 1e-12. */
+  readonly tolerance?: number
+}
 
 /** `value` is ½ ‖r‖². */
 export interface LeastSquaresResult extends SearchResult {

@@ -32,7 +32,8 @@ export class Ledger {
   }
 
   /**
-   * The ends of the polishes that begin in `starts`, in their order; they share the evaluations left up to `limit`. Undefined
+   * The ends of the polishes that begin in `starts`, in their order; they share the evaluations left up to `limit`; `rough`
+   * by the problem's stand-in. Undefined
    * for those not done.
    */
   async polish(
@@ -40,12 +41,13 @@ export class Ledger {
     tolerance: number,
     step: number,
     limit: number,
+    rough = false,
   ): Promise<(PolishEnd | undefined)[]> {
     const left = Math.floor(limit - this.evaluations)
     const affordable = starts.slice(0, Math.max(0, left))
     const maxEvaluations = Math.floor(left / affordable.length)
     const results = await this.work(
-      affordable.map((start) => ({ kind: 'polish', start, tolerance, step, maxEvaluations })),
+      affordable.map((start) => ({ kind: 'polish', start, tolerance, step, maxEvaluations, rough })),
     )
     this.polished += results.filter((result) => result !== undefined).length
     return starts.map((_, k) => results[k] && { ...results[k].candidates[0], reason: results[k].reason })

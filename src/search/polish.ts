@@ -1,8 +1,8 @@
 import { augmentedLagrangian, type ConstrainedResult } from './augmentedLagrangian.js'
 import { nelderMead, type SimplexOptions } from './nelderMead.js'
-import type { SearchProblem } from './problem.js'
+import { type SearchProblem, violationOf } from './problem.js'
 import { quasiNewton } from './quasiNewton.js'
-import { DEFAULT_TOLERANCE } from './result.js'
+import { DEFAULT_TOLERANCE, type ObjectiveWithGradient } from './result.js'
 
 /**
  * A quasi-Newton step promises little also where its model of a curved valley is still poor: it is asked for more digits than the
@@ -10,20 +10,31 @@ import { DEFAULT_TOLERANCE } from './result.js'
  */
 const QUASI_NEWTON_SHARE = 1e-4
 
-/** The local minimum next to `start`, by the method that fits what is known of the problem. */
+/**
+ * The local minimum next to `start`, by the method that fits what is known of the problem. Constraints are often idle: with a
+ * gradient they are left aside first, and heeded where the minimum misses one.
+ */
 export function polish(
   problem: SearchProblem,
   start: ArrayLike<number>,
   options: SimplexOptions = {},
 ): ConstrainedResult {
   const { variables, objective, objectiveWithGradient, constraints } = problem
-  if (constraints !== undefined) return augmentedLagrangian({ ...problem, constraints }, start, options)
-  const result =
-    objectiveWithGradient === undefined
-      ? nelderMead(objective, variables, start, options)
-      : quasiNewton(objectiveWithGradient, variables, start, {
-          ...options,
-          tolerance: QUASI_NEWTON_SHARE * (options.tolerance ?? DEFAULT_TOLERANCE),
-        })
-  return { ...result, violation: 0 }
+  const free = objectiveWithGradient && descend(objectiveWithGradient, problem, start, options)
+  if (constraints === undefined) {
+    return free ?? { ...nelderMead(objective, variables, start, options), violation: 0 }
+  }
+  if (free !== undefined && violationOf(constraints(free.x)) === 0) return free
+  const heeded = augmentedLagrangian({ ...problem, constraints }, free?.x ?? start, options)
+  return { ...heeded, evaluations: heeded.evaluations + (free?.evaluations ?? 0) }
+}
+
+function descend(
+  objective: ObjectiveWithGradient,
+  { variables }: SearchProblem,
+  start: ArrayLike<number>,
+  options: SimplexOptions,
+): ConstrainedResult {
+  const tolerance = QUASI_NEWTON_SHARE * (options.tolerance ?? DEFAULT_TOLERANCE)
+  return { ...quasiNewton(objective, variables, start, { ...options, tolerance }), violation: 0 }
 }

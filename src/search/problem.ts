@@ -5,12 +5,14 @@ import type { Variable } from './variables.js'
 export interface SearchProblem {
   readonly variables: readonly Variable[]
   readonly objective: Objective
-  /** Used by the polish of an unconstrained problem, where given. */
+  /** Used by the polish as long as the constraints are met where it ends, where given. */
   readonly objectiveWithGradient?: ObjectiveWithGradient
   /** One number per constraint, in a unit of its own: met where <= 0, else how far it is missed. Always the same count. */
   readonly constraints?: (x: Float64Array) => readonly number[]
   /** A cheaper stand-in for the objective, by which starts are chosen and nothing else. */
   readonly screen?: Objective
+  /** A cheaper stand-in for the first polish of each start; where that ends the problem itself is evaluated. */
+  readonly rough?: Pick<SearchProblem, 'objective' | 'objectiveWithGradient' | 'constraints'>
 }
 
 /** A point with what is known of it. */

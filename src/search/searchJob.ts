@@ -11,6 +11,8 @@ export type SearchJob =
       readonly tolerance: number
       readonly step: number
       readonly maxEvaluations: number
+      /** By the problem's stand-in, where it has one. */
+      readonly rough?: boolean
     }
 
 export interface SearchJobResult {
@@ -40,8 +42,11 @@ export function searchInline(problem: SearchProblem, stopped?: () => boolean): S
 export function runSearchJob(problem: SearchProblem, job: SearchJob, stopped?: () => boolean): SearchJobResult {
   if (job.kind === 'polish') {
     const { start, tolerance, step, maxEvaluations } = job
-    const result = polish(problem, start, { tolerance, step, maxEvaluations, stopped })
-    return { candidates: [result], evaluations: result.evaluations, reason: result.reason }
+    const options = { tolerance, step, maxEvaluations, stopped }
+    const standIn = job.rough === true ? problem.rough : undefined
+    const result = polish({ ...problem, ...standIn }, start, options)
+    const end = standIn === undefined ? result : evaluated(problem, result.x)
+    return { candidates: [end], evaluations: result.evaluations, reason: result.reason }
   }
   const candidates = job.points.map((x) => screen(problem, x))
   return {
@@ -52,7 +57,11 @@ export function runSearchJob(problem: SearchProblem, job: SearchJob, stopped?: (
 }
 
 function screen(problem: SearchProblem, x: Float64Array): Candidate {
-  const value = (problem.screen ?? problem.objective)(x)
+  return evaluated({ ...problem, objective: problem.screen ?? problem.objective }, x)
+}
+
+function evaluated(problem: SearchProblem, x: Float64Array): Candidate {
+  const value = problem.objective(x)
   return {
     x,
     value: Number.isFinite(value) ? value : Number.POSITIVE_INFINITY,

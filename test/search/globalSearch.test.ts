@@ -30,6 +30,8 @@ function gridAndPolish(variables: readonly Variable[], steps: number): number {
 }
 
 describe('on the landscape of a film pair', () => {
+  const leastOfFilmPair = gridAndPolish(FILM_PAIR, 12)
+
   const withDifferences = (x: Float64Array, gradient: Float64Array): number => {
     for (let i = 0; i < 4; i++) {
       const h = i < 2 ? 1e-5 : 1e-3
@@ -42,7 +44,7 @@ describe('on the landscape of a film pair', () => {
     ['the box of the trade', FILM_PAIR, 6_000],
     ['a wide box, with twice as many families', WIDE_FILM_PAIR, 20_000],
   ] as const)('finds the best of near-equal families with every seed in %s', async (_, variables, most) => {
-    const oracle = gridAndPolish(variables, 12)
+    const oracle = variables === FILM_PAIR ? leastOfFilmPair : gridAndPolish(variables, 12)
     for (const seed of SEEDS) {
       const result = await search({ variables, objective: filmPair }, { seed })
       expect(result.value).toBeLessThan(oracle + 3e-9)
@@ -58,7 +60,6 @@ describe('on the landscape of a film pair', () => {
   })
 
   it('needs a sixth of the evaluations where there is a gradient, and chooses starts as well by fewer wavelengths', async () => {
-    const oracle = gridAndPolish(FILM_PAIR, 12)
     const problem = {
       variables: FILM_PAIR,
       objective: filmPair,
@@ -68,8 +69,8 @@ describe('on the landscape of a film pair', () => {
     for (const seed of SEEDS) {
       const result = await search(problem, { seed })
       expect(result.reason).toBe('converged')
-      expect(result.value).toBeLessThan(oracle + 3e-9)
-      expect(result.evaluations).toBeLessThan(1_300)
+      expect(result.value).toBeLessThan(leastOfFilmPair + 3e-9)
+      expect(result.evaluations).toBeLessThan(1_000)
     }
   })
 

@@ -1,5 +1,5 @@
 import { METRIC_QUANTITIES } from '../charts/quantity.js'
-import type { LimitEvaluation } from '../studies/evaluate.js'
+import type { AskedLimit, LimitEvaluation } from '../studies/evaluate.js'
 import { given } from './decimals.js'
 import { metricWithUnit } from './metricNumber.js'
 import type { Paint } from './paint.js'
@@ -13,20 +13,27 @@ export function limitsText(limits: readonly LimitEvaluation[], paint: Paint): st
   const met = limits.filter((limit) => limit.met).length
   const count = `limits: ${met} of ${limits.length} met`
   const rows = limits.map((limit) => [
-    `  ${METRIC_QUANTITIES[limit.metric].label}${levelText(limit)}`,
-    `θ ${given(limit.theta_deg)}° φ ${given(limit.phi_deg)}°`,
-    askedText(limit),
+    ...limitCells(limit),
     metricWithUnit(limit.metric, limit.value),
     verdictText(limit, paint),
   ])
   return `${met === limits.length ? paint.strong(count) : paint.bad(count)}\n${textTable(COLUMNS, rows)}`
 }
 
-function levelText({ illuminance_lx }: LimitEvaluation): string {
+/** What is limited, from where, to what. */
+export function limitCells(limit: AskedLimit): [name: string, direction: string, asked: string] {
+  return [
+    `  ${METRIC_QUANTITIES[limit.metric].label}${levelText(limit)}`,
+    `θ ${given(limit.theta_deg)}° φ ${given(limit.phi_deg)}°`,
+    askedText(limit),
+  ]
+}
+
+export function levelText({ illuminance_lx }: AskedLimit): string {
   return illuminance_lx === undefined ? '' : ` at ${given(illuminance_lx)} lx`
 }
 
-function askedText({ metric, max, min }: LimitEvaluation): string {
+export function askedText({ metric, max, min }: AskedLimit): string {
   const { unit, factor } = METRIC_QUANTITIES[metric]
   const shown = (value: number): string => `${given(factor * value)}${unit === '' ? '' : ` ${unit}`}`
   const parts = [
@@ -36,7 +43,7 @@ function askedText({ metric, max, min }: LimitEvaluation): string {
   return parts.join(', ')
 }
 
-function verdictText({ metric, margin, met, value }: LimitEvaluation, paint: Paint): string {
+export function verdictText({ metric, margin, met, value }: LimitEvaluation, paint: Paint): string {
   if (Number.isNaN(value)) return paint.bad('missed: does not apply to this stack')
   const amount = metricWithUnit(metric, Math.abs(margin))
   return met ? paint.good(`met, ${amount} to spare`) : paint.bad(`missed by ${amount}`)

@@ -124,7 +124,7 @@ class StackReader {
   }
 
   private conclude(draft: Omit<Draft, 'compare'> & { compare?: CompareQuestion }, origins: Origins): Reading {
-    const placed = this.faults.flatMap((fault) => placeFault(fault, origins) ?? [])
+    const placed = this.faults.filter(isNoSequel(this.faults)).flatMap((fault) => placeFault(fault, origins) ?? [])
     const used = [...this.cards.all()]
     const all = withoutRepeats([...this.problems, ...placed, ...used.flatMap(({ problems }) => problems)])
     for (const { source } of used) this.texts.set(source.file, source.text)
@@ -134,6 +134,12 @@ class StackReader {
     const stack = { ...draft, layers: draft.layers as readonly Layer[] } as Stack
     return { ok: true, stack, warnings: all, texts: this.texts }
   }
+}
+
+/** What a layer lacks because its film card cannot be read is not told besides. */
+function isNoSequel(faults: readonly PlacedFault[]): (fault: PlacedFault) => boolean {
+  const layers = new Set(faults.flatMap(({ at }) => (at[0] === 'layers' && at[2] === 'film' ? [at[1]] : [])))
+  return ({ at, code }) => code !== 'missing_key' || at[0] !== 'layers' || !layers.has(at[1])
 }
 
 function isFilm({ at }: { readonly at: readonly unknown[] }): boolean {

@@ -34,10 +34,19 @@ export function recordingFiles(files: StackFiles): { readonly files: StackFiles;
   }
 }
 
-/** Files that answer as they did when the record was made. */
+/**
+ * Files that answer as they did when the record was made. A pattern nobody asked for then is matched against the files that
+ * were read.
+ */
 export function recordedFiles({ reads, lists }: FilesRecord): StackFiles {
   return {
     read: (path) => (Object.hasOwn(reads, path) ? reads[path] : undefined),
-    list: (glob) => (Object.hasOwn(lists, glob) ? lists[glob] : []),
+    list: (glob) => (Object.hasOwn(lists, glob) ? lists[glob] : Object.keys(reads).filter(matching(glob)).sort()),
   }
+}
+
+function matching(glob: string): (path: string) => boolean {
+  const pieces = glob.split(/\*+/).map((piece) => piece.replace(/[.+?^${}()|[\]\\]/g, '\\$&'))
+  const pattern = new RegExp(`^${pieces.join('[^/]*')}$`)
+  return (path) => pattern.test(path)
 }

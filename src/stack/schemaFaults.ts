@@ -47,7 +47,14 @@ function knownKeys(schema: unknown): readonly string[] {
 
 /** Faults of the value `raw` that stands at `at`. */
 export function schemaFaults(issues: readonly Issue[], raw: unknown, at: readonly PathKey[]): PlacedFault[] {
-  return issues.flatMap((issue) => faultsOf(issue, raw, at))
+  const faults = issues.flatMap((issue) => faultsOf(issue, raw, at))
+  const meant = new Set(faults.flatMap((fault) => (fault.code === 'unknown_key' ? [keyMeant(fault)] : [])))
+  return faults.filter((fault) => fault.code !== 'missing_key' || !meant.has(fault.at.join('.')))
+}
+
+/** Path of the key that a mistyped one stands for: it is not missing besides. */
+function keyMeant({ at, suggestion }: PlacedFault): string {
+  return [...at.slice(0, -1), suggestion].join('.')
 }
 
 function faultsOf(issue: Issue, raw: unknown, base: readonly PathKey[]): PlacedFault[] {
@@ -113,7 +120,7 @@ function unknownName(received: unknown, known: readonly string[], allowed: strin
     code: 'unknown_name',
     message: 'the value is none of those known',
     received: describeReceived(received),
-    allowed: known.length > 8 ? known.join(', ') : allowed,
+    allowed: known.length > 8 && known.length <= 20 ? known.join(', ') : allowed,
     ...(suggestion !== undefined && { suggestion }),
     next: 'choose one of those allowed',
   }

@@ -9,6 +9,8 @@ const LONGEST_TEXT = 2_000_000
 /** How often an alias may stand for its anchor. */
 const MOST_ALIASES = 2000
 
+const FIRST_PLACE: Range = { line: 1, column: 1, endLine: 1, endColumn: 1 }
+
 /** A YAML text with the places of its nodes. */
 export class Source {
   private constructor(
@@ -40,25 +42,24 @@ export class Source {
   }
 
   problem(fault: Fault, path: readonly PathKey[], key = false): Problem {
-    const range = this.rangeOf(path, key)
-    return { severity: 'error', file: this.file, path: path.join('.'), ...(range && { range }), ...fault }
+    return { severity: 'error', file: this.file, path: path.join('.'), range: this.rangeOf(path, key), ...fault }
   }
 
   /**
    * Place of the value (or the key) at a path; where the path ends early, that of the last node on it, as for a key that is
    * missing. Only its first line, so that a whole mapping is not marked.
    */
-  rangeOf(path: readonly PathKey[], key = false): Range | undefined {
+  rangeOf(path: readonly PathKey[], key = false): Range {
     let node: unknown = this.document.contents
     let pair: Pair | undefined
     for (const step of path) {
       const next = childOf(node, step)
-      if (next === undefined) return this.firstLine(pair?.key ?? node)
+      if (next === undefined) return this.firstLine(pair?.key ?? node) ?? FIRST_PLACE
       pair = isPair(next) ? next : undefined
       node = pair === undefined ? next : pair.value
     }
     const wanted = key && pair !== undefined ? pair.key : (node ?? pair?.key)
-    return this.firstLine(wanted)
+    return this.firstLine(wanted) ?? FIRST_PLACE
   }
 
   private firstLine(node: unknown): Range | undefined {
@@ -71,7 +72,7 @@ export class Source {
     const stop = Math.max(start, lineEnd >= 0 && lineEnd < end ? lineEnd : end)
     const from = this.lines.linePos(start)
     const to = this.lines.linePos(stop)
-    if (from.line === 0) return { line: 1, column: 1, endLine: 1, endColumn: 1 }
+    if (from.line === 0) return FIRST_PLACE
     return { line: from.line, column: from.col, endLine: to.line, endColumn: to.col }
   }
 

@@ -87,8 +87,8 @@ const angle = (description: string) => quantitySchema(FIELD_LIMITS.azimuth, desc
 export function filmFields(files: TableFiles, index: ReturnType<typeof indexSchema>) {
   const transmittance = (name: 'single_transmittance' | 'transmission_axis_transmittance', text: string, say: string) =>
     spectrumSchema(FIELD_LIMITS[name], files, text, [say]).optional()
-  const crossed = (text: string) =>
-    spectrumSchema(FIELD_LIMITS.absorption_axis_transmittance, files, text, ['0.02 %']).optional()
+  const crossed = (name: 'k2' | 'absorption_axis_transmittance', text: string) =>
+    spectrumSchema(FIELD_LIMITS[name], files, text, ['0.02 %']).optional()
   return {
     isotropic: { thickness, coherent, index: index('Refractive index.') },
     retarder: {
@@ -118,13 +118,16 @@ export function filmFields(files: TableFiles, index: ReturnType<typeof indexSche
       ),
       polarization_efficiency: transmittance('single_transmittance', '(K1 - K2)/(K1 + K2), in air.', '99.98 %'),
       k1: transmittance('single_transmittance', 'Along the transmission axis, in air, faces included.', '86 %'),
-      k2: crossed('Along the absorption axis, in air, faces included.'),
+      k2: crossed('k2', 'Along the absorption axis, in air, faces included.'),
       transmission_axis_transmittance: transmittance(
         'transmission_axis_transmittance',
         'Internal, one pass, along the transmission axis.',
         '93 %',
       ),
-      absorption_axis_transmittance: crossed('Internal, one pass, along the absorption axis.'),
+      absorption_axis_transmittance: crossed(
+        'absorption_axis_transmittance',
+        'Internal, one pass, along the absorption axis.',
+      ),
     },
     crystal: {
       thickness,

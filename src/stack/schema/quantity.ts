@@ -101,9 +101,15 @@ export function rangeFault(raw: unknown, value: number, limits: Limits): Fault |
 }
 
 export function rangeText({ min, max, open, quantity }: Limits): string {
-  const from = formatQuantity(min, quantity, 6)
-  const to = formatQuantity(max, quantity, 6)
+  const from = limitText(min, quantity)
+  const to = limitText(max, quantity)
   return `${open === 'min' ? 'more than' : 'from'} ${from} ${open === 'max' ? 'to below' : 'to'} ${to}`
+}
+
+/** Long lengths in the unit people would use. */
+function limitText(value: number, quantity: QuantityKind): string {
+  if (quantity !== 'length' || Math.abs(value) < 1e4) return formatQuantity(value, quantity, 6)
+  return Math.abs(value) < 1e6 ? `${value / 1e3} um` : `${value / 1e6} mm`
 }
 
 function spellingOf({ quantity }: Limits): string {

@@ -29,6 +29,8 @@ export function indexSchema(files: TableFiles) {
   return (description: string) => law.meta({ description })
 }
 
+const MATERIALS = `one of ${MATERIAL_NAMES.length} published materials: offblack materials lists them`
+
 function complexSchema(files: TableFiles) {
   return z
     .strictObject({
@@ -52,11 +54,13 @@ const cauchySchema = z
     examples: [{ cauchy_nm: [1.48, 4000, 0] }],
   })
 
-const materialSchema = z.strictObject({ material: z.enum(MATERIAL_NAMES as [string, ...string[]]) }).meta({
-  title: 'Published material',
-  description: 'Published data with their source.',
-  examples: [{ material: 'tac' }],
-})
+const materialSchema = z
+  .strictObject({ material: z.enum(MATERIAL_NAMES as [string, ...string[]], { error: () => MATERIALS }) })
+  .meta({
+    title: 'Published material',
+    description: 'Published data with their source.',
+    examples: [{ material: 'tac' }],
+  })
 
 const formulaSchema = z.strictObject({ formula: z.string().min(1) }).meta({
   title: 'Formula',

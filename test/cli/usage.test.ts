@@ -3,7 +3,7 @@ import { join } from 'node:path'
 import { describe, expect, test } from 'vitest'
 import { VERBS } from '../../src/cli/verbs.js'
 import { ROOT } from '../sourceFiles.js'
-import { offblack, workFolder } from './offblack.js'
+import { offblack, outcomeOf, startOffblack, workFolder } from './offblack.js'
 
 describe('usage', () => {
   test('an unknown verb or option is answered with the nearest', async () => {
@@ -47,16 +47,26 @@ describe('usage', () => {
   })
 })
 
+/** Verbs that answer until they are stopped; they print their address. */
+const SERVING = ['tune']
+
 describe('every verb', () => {
-  test.each(VERBS.map(({ name }) => name))('%s --help ends with an example that runs', async (name) => {
-    const folder = workFolder()
-    const help = await offblack([name, '--help'], folder)
-    expect(help.code).toBe(0)
-    const example = help.stdout.trimEnd().split('\n').at(-1) ?? ''
-    expect(example).toMatch(new RegExp(`^ {2}offblack ${name}\\b`))
-    const [command] = example.trim().split(' > ')
-    const { code, stderr } = await offblack(command.split(' ').slice(1), folder)
-    expect(stderr).not.toContain('error')
-    expect([0, 3]).toContain(code)
-  })
+  test.each(VERBS.map(({ name }) => name))(
+    '%s --help ends with an example that runs',
+    { timeout: 180_000 },
+    async (name) => {
+      const folder = workFolder()
+      const help = await offblack([name, '--help'], folder)
+      expect(help.code).toBe(0)
+      const example = help.stdout.trimEnd().split('\n').at(-1) ?? ''
+      expect(example).toMatch(new RegExp(`^ {2}offblack ${name}\\b`))
+      const [command] = example.trim().split(' > ')
+      const child = startOffblack(command.split(' ').slice(1), folder)
+      if (SERVING.includes(name)) child.stdout?.once('data', () => child.kill('SIGINT'))
+      const { code, stdout, stderr } = await outcomeOf(child)
+      expect(stderr).not.toContain('error')
+      if (SERVING.includes(name)) expect(stdout).toContain('http://127.0.0.1')
+      else expect([0, 3]).toContain(code)
+    },
+  )
 })

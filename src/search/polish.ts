@@ -24,7 +24,7 @@ export function polish(
   if (constraints === undefined) {
     return free ?? { ...nelderMead(objective, variables, start, options), violation: 0 }
   }
-  if (free !== undefined && violationOf(constraints(free.x)) === 0) return free
+  if (free !== undefined && (free.reason === 'stopped' || violationOf(constraints(free.x)) === 0)) return free
   const heeded = augmentedLagrangian({ ...problem, constraints }, free?.x ?? start, options)
   return { ...heeded, evaluations: heeded.evaluations + (free?.evaluations ?? 0) }
 }

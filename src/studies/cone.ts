@@ -12,6 +12,7 @@ import { prepareStack } from './prepareStack.js'
 export interface ConeQuestion {
   /** rad; below π/2. */
   readonly thetaMax: number
+  /** About; the steps are made even. */
   readonly thetaStep: number
   readonly phiStep: number
   /** Luminous reflectance that counts as dark enough, for the summary; default: the first such limit of the file. */
@@ -91,8 +92,8 @@ export async function cone(
   hooks: Hooks = {},
   map: ParallelMap = mapInline,
 ): Promise<Cone> {
-  const thetas = steps(0, question.thetaMax, question.thetaStep)
-  const phis = steps(0, 2 * Math.PI - question.phiStep / 2, question.phiStep)
+  const thetas = [...divided(question.thetaMax, question.thetaStep), question.thetaMax]
+  const phis = divided(2 * Math.PI, question.phiStep)
   const half = phis.length % 2 === 0 && hasHalfTurnSymmetry(stack, question.thetaMax)
   const computed = half ? phis.slice(0, phis.length / 2) : phis
   const rows = await map(coneRow, { stack, phis: computed }, thetas, hooks)
@@ -125,9 +126,10 @@ export async function cone(
   }
 }
 
-function steps(from: number, to: number, step: number): number[] {
-  const count = Math.floor((to - from) / step + 1e-9) + 1
-  return Array.from({ length: count }, (_, k) => from + k * step)
+/** From 0 to below `whole`, which even steps divide, as near to `step` as may be. */
+function divided(whole: number, step: number): number[] {
+  const count = Math.max(1, Math.round(whole / step))
+  return Array.from({ length: count }, (_, k) => (k * whole) / count)
 }
 
 /**

@@ -5,7 +5,7 @@ import { isSpectral } from '../appearance/metricWeights.js'
 import type { SearchProblem } from '../search/problem.js'
 import type { Variable } from '../search/variables.js'
 import { findParameter } from '../stack/parameters.js'
-import type { MetricRequest, Objective, OptimizeQuestion, Range, Stack } from '../stack/stack.js'
+import type { Limit, MetricRequest, Objective, OptimizeQuestion, Range, Stack } from '../stack/stack.js'
 import { wavelengthsOf } from '../stack/wavelengths.js'
 import { limitMargin } from './evaluate.js'
 
@@ -37,15 +37,36 @@ export function designProblem(
   question: OptimizeQuestion,
   wavelengths: Float64Array = wavelengthsOf(stack.conditions),
 ): SearchProblem {
-  const variables = designVariables(stack, question)
-  const paths = Object.keys(question.vary)
   const coarse = coarseWavelengths(wavelengths)
+  const rough = functionsAt(stack, question, coarse)
   return {
-    variables,
-    objective: meanOverViews(stack, paths, question.minimize, wavelengths),
-    screen: meanOverViews(stack, paths, question.minimize, coarse),
-    ...gradientOf(stack, paths, question.minimize, wavelengths),
-    ...(question.subject_to.length > 0 && { constraints: constraintsOf(stack, paths, question, wavelengths) }),
+    variables: designVariables(stack, question),
+    ...functionsAt(stack, question, wavelengths),
+    screen: rough.objective,
+    rough,
+  }
+}
+
+/** Objective, gradient and constraints on these wavelengths, each made ready when first asked for. */
+function functionsAt(stack: Stack, question: OptimizeQuestion, wavelengths: Float64Array) {
+  const paths = Object.keys(question.vary)
+  const { minimize, subject_to } = question
+  return {
+    objective: whenAsked(() => meanOverViews(stack, paths, minimize, wavelengths)),
+    ...(isSpectral(minimize.metric) && {
+      objectiveWithGradient: whenAsked(() => gradientOf(stack, paths, minimize, wavelengths)),
+    }),
+    ...(subject_to.length > 0 && {
+      constraints: whenAsked(() => constraintsOf(stack, paths, subject_to, wavelengths)),
+    }),
+  }
+}
+
+function whenAsked<Args extends unknown[], Result>(make: () => (...args: Args) => Result): (...args: Args) => Result {
+  let made: ((...args: Args) => Result) | undefined
+  return (...args) => {
+    made ??= make()
+    return made(...args)
   }
 }
 
@@ -63,33 +84,28 @@ function meanOverViews(stack: Stack, paths: readonly string[], objective: Object
   }
 }
 
-/** The same with its gradient, where the metric has one. */
+/** The same with its gradient; the metric has one where `isSpectral`. */
 function gradientOf(
   stack: Stack,
   paths: readonly string[],
   { metric, sense, views }: Objective,
   wavelengths: Float64Array,
 ) {
-  if (!isSpectral(metric)) return {}
+  if (!isSpectral(metric)) throw new Error(`no gradient of ${metric}`)
   const total = views.reduce((sum, view) => sum + view.weight, 0)
   const weighted = views.map((view) => ({ ...view, weight: (sense * view.weight) / total }))
-  return { objectiveWithGradient: createGradientExperiment(stack, paths, metric, weighted, wavelengths) }
+  return createGradientExperiment(stack, paths, metric, weighted, wavelengths)
 }
 
 export function objectiveRequests({ metric, illuminance, views }: Objective): MetricRequest[] {
   return views.map(({ theta, phi }) => ({ metric, theta, phi, ...(illuminance !== undefined && { illuminance }) }))
 }
 
-function constraintsOf(
-  stack: Stack,
-  paths: readonly string[],
-  { subject_to }: OptimizeQuestion,
-  wavelengths: Float64Array,
-) {
-  const experiment = createExperiment(stack, paths, subject_to, wavelengths)
-  const values = new Float64Array(subject_to.length)
+function constraintsOf(stack: Stack, paths: readonly string[], limits: readonly Limit[], wavelengths: Float64Array) {
+  const experiment = createExperiment(stack, paths, limits, wavelengths)
+  const values = new Float64Array(limits.length)
   return (x: Float64Array): number[] => {
     experiment(x, values)
-    return subject_to.map((limit, k) => -limitMargin(limit, values[k]))
+    return limits.map((limit, k) => -limitMargin(limit, values[k]))
   }
 }

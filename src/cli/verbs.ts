@@ -3,9 +3,10 @@
  * loaded only when asked for, so that `--help` is quick.
  */
 import { Option } from 'commander'
+import { angleOption } from './angleOption.js'
 import type { VerbModule } from './context.js'
 import { directionOptions } from './directionOptions.js'
-import { collected, wholeNumber } from './optionValues.js'
+import { collected, quantityBetween, wholeNumber } from './optionValues.js'
 
 export interface Verb {
   readonly name: string
@@ -39,12 +40,43 @@ export const VERBS: readonly Verb[] = [
     load: () => import('./verbs/optimize.js'),
   },
   {
+    name: 'cone',
+    summary: 'how does it look from every direction?',
+    file: 'stack',
+    options: [
+      angleOption('--theta-max <angle>', 'widest angle from the normal', 1, 89, 80),
+      angleOption('--theta-step <angle>', 'between rings', 0.5, 45, 5),
+      angleOption('--phi-step <angle>', 'between azimuths, which divide the circle evenly', 0.5, 90, 10),
+      new Option('--limit <share>', 'luminous reflectance that is dark enough; default that of the file').argParser(
+        quantityBetween('share', 0, 1),
+      ),
+    ],
+    example: 'cone stacks/dive-computer.stack.yaml --theta-max 70deg --out out',
+    load: () => import('./verbs/cone.js'),
+  },
+  {
     name: 'budget',
     summary: 'where does the remaining light come from?',
     file: 'stack',
     options: directionOptions(),
     example: 'budget stacks/dive-computer.stack.yaml --theta 30deg --phi 90deg',
     load: () => import('./verbs/budget.js'),
+  },
+  {
+    name: 'tolerance',
+    summary: 'how much of production passes, and what to tighten?',
+    file: 'stack',
+    options: [
+      new Option('--samples <number>', 'laminates drawn, instead of those of the file').argParser(wholeNumber(1, 1e8)),
+      new Option('--seed <number>', 'of the draws, instead of that of the file').argParser(wholeNumber(0, 2 ** 32 - 1)),
+      new Option('--sampling <name>', 'instead of that of the file').choices(['random', 'latin_hypercube', 'sobol']),
+      new Option('--wanted-yield <share>', 'below it the exit code is 3 and the tightening is told')
+        .argParser(quantityBetween('share', 0.01, 0.999_999))
+        .default(0.95, '95 %'),
+      new Option('--draws-only', 'neither sensitivity nor what to tighten').default(false),
+    ],
+    example: 'tolerance stacks/dive-computer.stack.yaml --samples 500',
+    load: () => import('./verbs/tolerance.js'),
   },
   {
     name: 'compare',

@@ -8,7 +8,7 @@
  */
 import { Scene } from '../appearance/scene.js'
 import { linearRgbToSrgb, srgbToHex, xyzToLinearRgb } from '../color/srgb.js'
-import type { Stack } from '../stack/stack.js'
+import type { Direction, Stack } from '../stack/stack.js'
 
 /** lx, cd/m². */
 export interface OffStateSwatch {
@@ -27,10 +27,15 @@ export interface OffStateSwatch {
 /** Where the file names no illuminance: what offices are lit with (500 lx for reading and writing, EN 12464-1, from memory). */
 const OFFICE_LX = 500
 
-/** From the first direction of the file, for each illuminance of the file, against a white diffuser and the lit screen. */
-export function offStateSwatches(stack: Stack): OffStateSwatch[] {
-  const scene = new Scene(stack)
-  const [{ theta, phi }] = stack.conditions.directions
+/**
+ * For each illuminance of the file, against a white diffuser and the lit screen; from the first direction of the file unless
+ * another is given.
+ */
+export function offStateSwatches(
+  stack: Stack,
+  { theta, phi }: Direction = stack.conditions.directions[0],
+  scene: Scene = new Scene(stack),
+): OffStateSwatch[] {
   const look = scene.look(stack, theta, phi)
   const share = scene.emissionShare(stack, look)
   const { whiteXyz } = scene.weights

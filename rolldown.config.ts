@@ -22,7 +22,7 @@ const fonts: Plugin = {
 
 // Everything is bundled, so that `--help` loads one small file and each verb loads only what it needs.
 // Native and browser-driving packages stay outside: they carry files of their own.
-export default defineConfig({
+const command = defineConfig({
   input: { offblack: 'src/cli/main.ts', worker: 'src/cli/worker.ts', library: 'src/library.ts' },
   platform: 'node',
   external: ['@napi-rs/canvas', /^playwright-core/],
@@ -38,3 +38,13 @@ export default defineConfig({
     minify: false,
   },
 })
+
+/** The script in the pages of `report`: one file that asks for nothing. */
+const reviewCharts = defineConfig({
+  input: { 'review-charts': 'src/page/reviewCharts.ts' },
+  platform: 'browser',
+  resolve: { extensionAlias: { '.js': ['.ts', '.js'] } },
+  output: { dir: 'dist', format: 'iife', entryFileNames: '[name].js', minify: true },
+})
+
+export default [command, reviewCharts]

@@ -25,3 +25,13 @@ export function quantityBetween(kind: QuantityKind, min: number, max: number): (
     throw new InvalidArgumentError(`It takes a value from ${least} to ${most}.`)
   }
 }
+
+/** Parser of an option that takes names of a list, separated by commas. */
+export function namesAmong<Name extends string>(allowed: readonly Name[]): (text: string) => Name[] {
+  return (text) => {
+    const names = text.split(',').map((name) => name.trim())
+    const found = allowed.filter((name) => names.includes(name))
+    if (names.every((name) => found.some((one) => one === name))) return found
+    throw new InvalidArgumentError(`It takes names among ${allowed.join(', ')}, separated by commas.`)
+  }
+}

@@ -3,10 +3,11 @@
  * loaded only when asked for, so that `--help` is quick.
  */
 import { Option } from 'commander'
+import { REVIEW_PARTS } from '../studies/reviewParts.js'
 import { angleOption } from './angleOption.js'
 import type { VerbModule } from './context.js'
 import { directionOptions } from './directionOptions.js'
-import { collected, quantityBetween, wholeNumber } from './optionValues.js'
+import { collected, namesAmong, quantityBetween, wholeNumber } from './optionValues.js'
 
 export interface Verb {
   readonly name: string
@@ -38,6 +39,29 @@ export const VERBS: readonly Verb[] = [
     ],
     example: 'optimize stacks/dive-computer.stack.yaml --out out',
     load: () => import('./verbs/optimize.js'),
+  },
+  {
+    name: 'sweep',
+    summary: 'how does it move along one parameter or two?',
+    file: 'stack',
+    options: [
+      new Option(
+        '--vary <range>',
+        'path=from:to:step, with parameters that follow behind commas; once or twice; theta, phi and wavelength too',
+      )
+        .argParser(collected)
+        .makeOptionMandatory(),
+      new Option('--metric <name>', 'a metric, e.g. chroma or chroma@45deg,90deg; may be repeated').argParser(
+        collected,
+      ),
+      ...directionOptions(),
+      new Option('--band <length>', 'width of the band around a varied wavelength')
+        .argParser(quantityBetween('length', 0.01, 400))
+        .default(10, '10nm'),
+    ],
+    example:
+      'sweep stacks/dive-computer.stack.yaml --vary half.slow_axis=10deg:20deg:1deg,quarter.slow_axis=2*half.slow_axis+45',
+    load: () => import('./verbs/sweep.js'),
   },
   {
     name: 'cone',
@@ -117,6 +141,24 @@ export const VERBS: readonly Verb[] = [
     ],
     example: 'tune stacks',
     load: () => import('./verbs/tune.js'),
+  },
+  {
+    name: 'report',
+    summary: 'the design review: one HTML page and its PDF, with all the figures',
+    file: 'stack',
+    options: [
+      new Option('--sections <names>', `parts that take time, separated by commas: ${REVIEW_PARTS.join(', ')}`)
+        .argParser(namesAmong(REVIEW_PARTS))
+        .default(
+          REVIEW_PARTS.filter((part) => part !== 'compare'),
+          'all but compare',
+        ),
+      new Option('--seed <number>', 'of the search; the same seed gives the same digits')
+        .argParser(wholeNumber(0, 2 ** 31 - 1))
+        .default(1),
+    ],
+    example: 'report stacks/dive-computer.stack.yaml --sections cone,budget --out out',
+    load: () => import('./verbs/report.js'),
   },
   {
     name: 'check',

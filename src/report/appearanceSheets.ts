@@ -82,7 +82,7 @@ function directionLabel({ theta_deg, phi_deg }: DirectionEvaluation): string {
   return theta_deg === 0 ? 'θ 0°' : `θ ${given(theta_deg)}°, φ ${given(phi_deg)}°`
 }
 
-function illuminantText(illuminant: Illuminant): string {
+export function illuminantText(illuminant: Illuminant): string {
   if (typeof illuminant === 'string') return illuminant
   return 'cct' in illuminant ? `daylight ${given(illuminant.cct)} K` : 'lamp of the file'
 }

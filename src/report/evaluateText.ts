@@ -38,13 +38,14 @@ function directionsTable(directions: readonly DirectionEvaluation[]): string {
   ])
 }
 
-interface MetricRow {
+export interface MetricRow {
   readonly label?: string
   readonly metric: MetricName
   readonly of: (direction: DirectionEvaluation) => number | undefined
 }
 
-const METRIC_ROWS: readonly MetricRow[] = [
+/** What is told of a direction, in this order. */
+export const METRIC_ROWS: readonly MetricRow[] = [
   { metric: 'luminous_reflectance', of: (d) => d.luminous_reflectance },
   { metric: 'front_reflectance', label: '  of the front faces', of: (d) => d.front_reflectance },
   { metric: 'inner_reflectance', label: '  from inside', of: (d) => d.inner_reflectance },

@@ -33,6 +33,7 @@ export function levelText({ illuminance_lx }: AskedLimit): string {
   return illuminance_lx === undefined ? '' : ` at ${given(illuminance_lx)} lx`
 }
 
+/** `at most 4.5 %`. */
 export function askedText({ metric, max, min }: AskedLimit): string {
   const { unit, factor } = METRIC_QUANTITIES[metric]
   const shown = (value: number): string => `${given(factor * value)}${unit === '' ? '' : ` ${unit}`}`
@@ -43,6 +44,7 @@ export function askedText({ metric, max, min }: AskedLimit): string {
   return parts.join(', ')
 }
 
+/** `met, 0.2 % to spare`, `missed by 0.2 %`. */
 export function verdictText({ metric, margin, met, value }: LimitEvaluation, paint: Paint): string {
   if (Number.isNaN(value)) return paint.bad('missed: does not apply to this stack')
   const amount = metricWithUnit(metric, Math.abs(margin))

@@ -30,7 +30,7 @@ export function optimizeText(
   return `${parts.filter((part) => part !== '').join('\n\n')}\n`
 }
 
-function questionText({ objective: { metric, sense, views, quantile } }: Optimum): string {
+export function questionText({ objective: { metric, sense, views, quantile } }: Optimum): string {
   const { label } = METRIC_QUANTITIES[metric]
   const share = quantile === undefined ? '' : `, ${given(100 * quantile)} % quantile under the tolerances`
   const weights = new Set(views.map(({ weight }) => weight))
@@ -88,7 +88,7 @@ function familiesText(stack: Stack, { families, family_margin, objective: { metr
   return `${heading}\n${textTable(columns, rows)}`
 }
 
-const REASONS: Readonly<Record<Optimum['reason'], string>> = {
+export const REASONS: Readonly<Record<Optimum['reason'], string>> = {
   converged: 'ended where the objective no longer moves',
   stalled: 'ended where no step improves the objective',
   limit: 'ended at the allowed number of evaluations',

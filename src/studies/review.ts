@@ -12,12 +12,9 @@ import { type LaminateFacts, laminateFacts } from './laminateFacts.js'
 import { type OffStateSwatch, offStateSwatches } from './offStateSwatches.js'
 import { type Optimum, optimize } from './optimize.js'
 import { mapInline, type ParallelMap } from './parallel.js'
+import type { ReviewPart } from './reviewParts.js'
 import { stageHooks } from './stageHooks.js'
 import { type Tolerance, tolerance } from './tolerance.js'
-
-/** Parts that take time or may not be wanted; the others always belong to a review. */
-export const REVIEW_PARTS = ['search', 'cone', 'budget', 'itinerary', 'tolerance', 'compare'] as const
-export type ReviewPart = (typeof REVIEW_PARTS)[number]
 
 export interface ReviewSettings {
   /** A part whose question the file does not ask is left out. */

@@ -1,0 +1,20 @@
+import type { Review } from '../../studies/review.js'
+import { Markup } from './markup.js'
+
+/** Digits the live charts get: finer than a pixel, half the size of the page. */
+const DIGITS = 6
+
+/**
+ * The review as JSON for the page's script, without what no chart shows: film cards with their spectra, and the layers, which
+ * stand in the drawing. Nothing in it can end the element it stands in.
+ */
+export function pageData(review: Review): Markup {
+  const designs = review.designs.map((design) => {
+    const { compare: _, ...stack } = design.stack
+    return { ...design, stack: { ...stack, layers: [] } }
+  })
+  const text = JSON.stringify({ ...review, designs }, (_, value) =>
+    typeof value === 'number' && Number.isFinite(value) ? Number(value.toPrecision(DIGITS)) : value,
+  )
+  return new Markup(text.replaceAll('<', '\\u003c'))
+}

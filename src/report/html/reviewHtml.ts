@@ -1,0 +1,104 @@
+import type { Review } from '../../studies/review.js'
+import type { ReportOrigin } from '../reportOrigin.js'
+import type { ReviewSheets } from '../reviewSheets.js'
+import type { Sheet } from '../sheet.js'
+import { chartFigure, DATA_ID } from './chartFigure.js'
+import { laminateSvg } from './laminateSvg.js'
+import { type Content, html, Markup } from './markup.js'
+import { pageData } from './pageData.js'
+import { basisSection } from './sections/basis.js'
+import { budgetSection } from './sections/budget.js'
+import { candidatesSection } from './sections/candidates.js'
+import { coneSection } from './sections/cone.js'
+import { figuresSection } from './sections/figures.js'
+import { itinerarySection } from './sections/itinerary.js'
+import { questionSection } from './sections/question.js'
+import { searchSection } from './sections/search.js'
+import { swatchesSection } from './sections/swatches.js'
+import { toleranceSection } from './sections/tolerance.js'
+import { STYLE } from './style.js'
+import { verdict } from './verdict.js'
+
+export interface PageParts {
+  readonly sheets: ReviewSheets
+  /** Vector picture of each sheet, by its name. */
+  readonly pictures: ReadonlyMap<string, string>
+  /** The script that puts live charts over the pictures, and its SHA-256 in base64: no other may run in the page. */
+  readonly script: string
+  readonly scriptSha256: string
+}
+
+/** A design review as one page that needs nothing but itself. */
+export function reviewHtml(review: Review, origin: ReportOrigin, parts: PageParts): string {
+  const sections = sectionsOf(review, parts)
+  const page = html`<!doctype html>
+<html lang="en">
+<head>
+<meta charset="utf-8">
+<meta http-equiv="Content-Security-Policy" content="default-src 'none'; img-src data:; style-src 'unsafe-inline'; script-src 'sha256-${parts.scriptSha256}'">
+<meta name="viewport" content="width=device-width, initial-scale=1">
+<meta name="generator" content="offblack ${origin.version}">
+<title>${review.title}: design review</title>
+<style>${new Markup(STYLE)}</style>
+</head>
+<body>
+<header><p>Design review, ${origin.date}</p>
+<h1>${review.title}</h1>
+${verdict(review)}
+</header>
+<main>
+${sections.map(({ title, content }, k) => html`<section><h2><span>${k + 1}</span> ${title}</h2>\n${content}\n</section>\n`)}
+</main>
+<footer>${originText(origin)}</footer>
+<script type="application/json" id="${DATA_ID}">${pageData(review)}</script>
+<script>${new Markup(parts.script)}</script>
+</body>
+</html>
+`
+  return page.text
+}
+
+interface Section {
+  readonly title: string
+  readonly content: Content
+}
+
+/** Those with something to tell, in the order of a review. */
+function sectionsOf(review: Review, { sheets, pictures }: PageParts): Section[] {
+  const { designs, tolerance, comparison } = review
+  const [first, last] = [designs[0], designs[designs.length - 1]]
+  const charts = (group: readonly Sheet[], look = '') =>
+    html`<div class="charts ${look}">${group.map((sheet) => chartFigure(sheet, pictures.get(sheet.name) ?? ''))}</div>`
+  const [spectra, colors] = [sheets.appearance.slice(0, -1), sheets.appearance.slice(-1)]
+  const about = designs.length > 1 && html`<p>Of the design after the search.</p>`
+  const sections: Section[] = [
+    { title: 'What is asked', content: questionSection(review) },
+    { title: 'The laminate', content: laminateSvg(last.laminate, first === last ? undefined : first.laminate) },
+    { title: 'Figures and limits', content: figuresSection(review) },
+    { title: 'Before and after the search', content: join(searchSection(review), charts(sheets.search)) },
+    { title: 'Reflectance spectrum', content: charts(spectra) },
+    { title: 'The off-state, seen', content: [swatchesSection(review), charts(colors, 'single')] },
+    { title: 'Viewing cone', content: join(coneSection(review), charts(sheets.cone, 'pairs')) },
+    { title: 'Light budget', content: join(budgetSection(review), [about, charts(sheets.budget)]) },
+    { title: 'Itinerary of the light', content: join(itinerarySection(review), [about, charts(sheets.itinerary)]) },
+    {
+      title: 'Production',
+      content: tolerance && [about, charts(sheets.tolerance, 'pairs'), toleranceSection(last.stack, tolerance)],
+    },
+    {
+      title: 'Films compared',
+      content: comparison && [charts(sheets.compare), candidatesSection(first.stack, comparison)],
+    },
+    { title: 'What this rests on', content: basisSection(review) },
+  ]
+  return sections.filter(({ content }) => content !== undefined)
+}
+
+/** The pictures before the table; nothing where there is no table. */
+function join(text: Markup | undefined, pictures: Content): Content {
+  return text && [pictures, text]
+}
+
+function originText({ file, sha256, sets, version, date }: ReportOrigin): Markup {
+  return html`<p>From <b>${file}</b>, SHA-256 <code>${sha256}</code>${sets.length > 0 && `, with ${sets.map((set) => `--set ${set}`).join(' ')}`}. offblack ${version}, ${date}. Every figure stands with all its digits in the JSON beside this report.</p>`
+}

@@ -1,4 +1,4 @@
-import { cubicBetween } from './cubicBetween.js'
+import { beyondEnd, cubicBetween } from './cubicBetween.js'
 
 /** Values on a polar grid: `values[iTheta][iPhi]`. */
 export interface PolarField {
@@ -19,14 +19,17 @@ function alongRow(row: readonly number[], phi: number): number {
   return cubicBetween([sample(-1), sample(0), sample(1), sample(2)], position - Math.floor(position))
 }
 
-/** Cubic in θ and φ through the samples; across the center the way goes on at φ + π, beyond the largest θ it stays. */
+/** Cubic in θ and φ through the samples; across the center the way goes on at φ + π; where there is no sample beyond the largest θ, as the last three run. */
 export function valueInPolarField({ thetaRad, values }: PolarField, theta: number, phi: number): number {
   const last = thetaRad.length - 1
   if (last === 0) return alongRow(values[0], phi)
   const position = Math.min(last, (theta / thetaRad[last]) * last)
   const i = Math.min(last - 1, Math.floor(position))
-  const sample = (row: number): number =>
-    row < 0 ? alongRow(values[-row], phi + Math.PI) : alongRow(values[Math.min(row, last)], phi)
+  const sample = (row: number): number => {
+    if (row < 0) return alongRow(values[-row], phi + Math.PI)
+    if (row <= last) return alongRow(values[row], phi)
+    return beyondEnd(sample(last), sample(last - 1), sample(last - 2))
+  }
   return cubicBetween([sample(i - 1), sample(i), sample(i + 1), sample(i + 2)], position - i)
 }
 

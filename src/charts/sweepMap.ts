@@ -2,7 +2,7 @@ import type { ChartConfiguration } from 'chart.js'
 import { type Axis, linearAxis } from './axis.js'
 import { type BandedMap, bandedMap } from './bandedMap.js'
 import { rangeOf, type ScaleRange } from './colorScale.js'
-import { cubicBetween } from './cubicBetween.js'
+import { beyondEnd, cubicBetween } from './cubicBetween.js'
 import { frameOptions, paperPainter } from './frame.js'
 import { LabelPlacer } from './labels.js'
 import { COLOR_BAR_MARGIN_PX, type MapDrawing, paintBands, paintColorBar, paintIsoLines } from './mapPainting.js'
@@ -119,6 +119,8 @@ function valueAt(rows: readonly (readonly number[])[], u: number, v: number): nu
 function cubicAt(unit: number, count: number, sample: (i: number) => number): number {
   const position = Math.min(1, Math.max(0, unit)) * (count - 1)
   const i = Math.min(count - 2, Math.floor(position))
-  const clamped = (index: number): number => sample(Math.min(count - 1, Math.max(0, index)))
-  return cubicBetween([clamped(i - 1), clamped(i), clamped(i + 1), clamped(i + 2)], position - i)
+  const inside = (index: number): number => sample(Math.min(count - 1, Math.max(0, index)))
+  const before = i > 0 ? sample(i - 1) : beyondEnd(sample(0), sample(1), inside(2))
+  const after = i + 2 < count ? sample(i + 2) : beyondEnd(sample(count - 1), sample(count - 2), inside(count - 3))
+  return cubicBetween([before, sample(i), sample(i + 1), after], position - i)
 }

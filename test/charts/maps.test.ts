@@ -2,7 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { colorScale, rangeOf } from '../../src/charts/colorScale.js'
 import { contourBands } from '../../src/charts/contourBands.js'
-import { cubicBetween } from '../../src/charts/cubicBetween.js'
+import { beyondEnd, cubicBetween } from '../../src/charts/cubicBetween.js'
 import { type PolarField, valueInPolarField, worstOf } from '../../src/charts/polarField.js'
 import { DEGREE, steps } from './steps.js'
 
@@ -85,5 +85,12 @@ describe('polar field', () => {
       expect(cubicBetween([-1, 0, 1, 2], t)).toBeCloseTo(t)
       expect(cubicBetween([1, 0, 1, 4], t)).toBeCloseTo(t * t)
     }
+  })
+
+  it('is continued beyond an edge as lines and parabolas run', () => {
+    expect(beyondEnd(2, 1, 0)).toBe(3)
+    expect(beyondEnd(4, 1, 0)).toBe(9)
+    // In the outermost ring too.
+    expect(valueInPolarField(field, 57 * DEGREE, 0.2)).toBeCloseTo(law(57 * DEGREE, 0.2), 2)
   })
 })

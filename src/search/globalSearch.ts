@@ -198,7 +198,8 @@ class Multistart {
       if (end !== undefined) this.families.add(end)
     }
     const { best, evaluations } = this.ledger
-    if (best !== undefined) this.options.progress?.(Math.min(0.99, evaluations / this.limit), best)
+    const done = Math.max(evaluations / this.limit, this.hitsOfBest() / ENOUGH_HITS)
+    if (best !== undefined) this.options.progress?.(Math.min(0.95, done), best)
   }
 
   private basinsAreKnown(): boolean {
@@ -206,7 +207,11 @@ class Multistart {
     const searches = hitsOf(rivals)
     const known = ((searches - rivals.length - 1) * (searches + rivals.length)) / (searches * (searches - 1))
     if (searches > 1 && known >= WANTED_COVERAGE) return true
-    return hitsOf(this.families.within(FIRST_TOLERANCE * this.sample.spread())) >= ENOUGH_HITS
+    return this.hitsOfBest() >= ENOUGH_HITS
+  }
+
+  private hitsOfBest(): number {
+    return hitsOf(this.families.within(FIRST_TOLERANCE * this.sample.spread()))
   }
 
   /** Where the combinations of listed values are too many to sample each: one value at a time, as long as that helps. */

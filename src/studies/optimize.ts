@@ -87,7 +87,7 @@ export async function optimize(
     margin,
     maxEvaluations: settings.maxEvaluations,
     stopped: hooks.stopped,
-    progress: (done, best) => hooks.progress?.(done, `best so far ${(sense * best.value).toPrecision(6)}`),
+    progress: (done, best) => hooks.progress?.(done, `best so far ${shown(question.minimize.metric, sense * best.value)}`),
   })
   const describe = describer(stack, question)
   const best = found.families[0]
@@ -119,6 +119,12 @@ export async function optimize(
     interrupted: found.reason === 'stopped',
     history: found.history.map(({ evaluations, value }) => ({ evaluations, objective: sense * value })),
   }
+}
+
+/** Short, for a line of progress. */
+function shown(metric: MetricName, value: number): string {
+  const isShare = metric.endsWith('reflectance') || metric.endsWith('transmittance')
+  return isShare ? `${(100 * value).toFixed(4)} %` : value.toPrecision(5)
 }
 
 /** Metrics told of every design. */

@@ -118,9 +118,9 @@ function valueAt(rows: readonly (readonly number[])[], u: number, v: number): nu
 
 function cubicAt(unit: number, count: number, sample: (i: number) => number): number {
   const position = Math.min(1, Math.max(0, unit)) * (count - 1)
+  if (count === 2) return sample(0) + (sample(1) - sample(0)) * position
   const i = Math.min(count - 2, Math.floor(position))
-  const inside = (index: number): number => sample(Math.min(count - 1, Math.max(0, index)))
-  const before = i > 0 ? sample(i - 1) : beyondEnd(sample(0), sample(1), inside(2))
-  const after = i + 2 < count ? sample(i + 2) : beyondEnd(sample(count - 1), sample(count - 2), inside(count - 3))
+  const before = i > 0 ? sample(i - 1) : beyondEnd(sample(0), sample(1), sample(2))
+  const after = i + 2 < count ? sample(i + 2) : beyondEnd(sample(count - 1), sample(count - 2), sample(count - 3))
   return cubicBetween([before, sample(i), sample(i + 1), after], position - i)
 }

@@ -60,7 +60,7 @@ export const VERBS: readonly Verb[] = [
         .default(10, '10nm'),
     ],
     example:
-      'sweep stacks/dive-computer.stack.yaml --vary half.slow_axis=10deg:20deg:1deg,quarter.slow_axis=2*half.slow_axis+45',
+      'sweep stacks/dive-computer.stack.yaml --vary half.slow_axis=15deg:25deg:1deg,quarter.slow_axis=half.slow_axis+67.5',
     load: () => import('./verbs/sweep.js'),
   },
   {

@@ -8,28 +8,36 @@ import { type Column, textTable } from './textTable.js'
 
 /** The cone ring by ring, over all azimuths, and what it comes to. */
 export function coneText(cone: Cone, paint: Paint = PLAIN): string {
-  const parts = [paint.strong(cone.title), ringsTable(cone), summaryText(cone, paint), paint.faint(ESTIMATE_CAUTION)]
+  const parts = [
+    `${paint.strong(cone.title)}\n${LEGEND}`,
+    ringsTable(cone),
+    summaryText(cone, paint),
+    paint.faint(ESTIMATE_CAUTION),
+  ]
   return `${parts.join('\n\n')}\n`
 }
+
+const LEGEND =
+  'over all azimuths: luminous reflectance in %, least, mean and most; the worst chroma, ΔE00 from head-on, emission and contrast'
 
 interface Ring {
   readonly heading: string
   readonly of: (row: number) => string
 }
 
-/** A line for each θ: least, mean and most over φ. */
+/** A line for each θ. */
 function ringsTable(cone: Cone): string {
   const reflectance = cone.luminous_reflectance
   const shown = (value: number): string => metricNumber('luminous_reflectance', value)
   const mostOf = (table: readonly (readonly number[])[], row: number): number => Math.max(...table[row])
   const rings: Ring[] = [
     { heading: 'θ', of: (row) => `${given(cone.theta_deg[row])}°` },
-    { heading: 'reflectance %, least', of: (row) => shown(Math.min(...reflectance[row])) },
+    { heading: 'least', of: (row) => shown(Math.min(...reflectance[row])) },
     { heading: 'mean', of: (row) => shown(meanOf(reflectance[row])) },
     { heading: 'most', of: (row) => shown(mostOf(reflectance, row)) },
     { heading: 'at φ', of: (row) => `${given(cone.phi_deg[reflectance[row].indexOf(mostOf(reflectance, row))])}°` },
-    { heading: 'chroma, most', of: (row) => metricNumber('chroma', mostOf(cone.chroma, row)) },
-    { heading: 'ΔE00 from head-on, most', of: (row) => fixed(mostOf(cone.delta_e00, row), 2) },
+    { heading: 'C*ab', of: (row) => metricNumber('chroma', mostOf(cone.chroma, row)) },
+    { heading: 'ΔE00', of: (row) => fixed(mostOf(cone.delta_e00, row), 2) },
     ...emissionRings(cone),
   ]
   const columns = rings.map(({ heading }): Column => ({ heading, align: 'right' }))
@@ -41,11 +49,11 @@ function ringsTable(cone: Cone): string {
 
 function emissionRings({ emission_transmittance, ambient_contrast }: Cone): Ring[] {
   const emission = emission_transmittance && {
-    heading: 'emission %, least',
+    heading: 'emission %',
     of: (row: number) => metricNumber('emission_transmittance', Math.min(...emission_transmittance[row])),
   }
   const contrasts = (ambient_contrast ?? []).map(({ illuminance_lx, ratio }) => ({
-    heading: `contrast at ${given(illuminance_lx)} lx, least`,
+    heading: `${given(illuminance_lx)} lx`,
     of: (row: number) => metricNumber('ambient_contrast', Math.min(...ratio[row])),
   }))
   return [...(emission ? [emission] : []), ...contrasts]

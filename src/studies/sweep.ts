@@ -8,6 +8,7 @@ import { formulaAt, prepareFormula } from '../materials/formula.js'
 import { compileParameters } from '../stack/parameters.js'
 import type { MetricRequest, Stack } from '../stack/stack.js'
 import { fromPlain, type QuantityKind, toPlain } from '../units/quantity.js'
+import { degrees } from './evaluate.js'
 import type { Hooks } from './hooks.js'
 import { metricKey } from './metricKey.js'
 import { leadingResults, mapInline, type ParallelMap, type Task } from './parallel.js'
@@ -39,6 +40,9 @@ export interface SweepQuestion {
 
 export interface Sweep {
   readonly title: string
+  /** Where all metrics look from; absent where they differ, and of what an axis varies. */
+  readonly theta_deg?: number
+  readonly phi_deg?: number
   /** Values in nm, degrees, fractions. */
   readonly axes: readonly { readonly path: string; readonly unit: QuantityKind; readonly values: readonly number[] }[]
   /** One number per point of the grid, the last axis running fastest. */
@@ -109,6 +113,7 @@ export async function sweep(
   const names = question.requests.map((request) => metricKey(request, question.requests))
   return {
     title: stack.title,
+    ...sharedDirection(question),
     axes: question.axes.map(({ path, kind, values: axisValues }) => ({
       path,
       unit: kind,
@@ -116,6 +121,15 @@ export async function sweep(
     })),
     metrics: Object.fromEntries(names.map((name, m) => [name, values.filter((_, k) => k % width === m)])),
     interrupted: done.length < blocks.length,
+  }
+}
+
+function sharedDirection({ axes, requests }: SweepQuestion): Pick<Sweep, 'theta_deg' | 'phi_deg'> {
+  const shared = (name: 'theta' | 'phi') =>
+    axes.every(({ path }) => path !== name) && requests.every((request) => request[name] === requests[0][name])
+  return {
+    ...(shared('theta') && { theta_deg: degrees(requests[0].theta) }),
+    ...(shared('phi') && { phi_deg: degrees(requests[0].phi) }),
   }
 }
 

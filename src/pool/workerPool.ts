@@ -73,7 +73,7 @@ class Pool {
         shared,
         setup: this.setupOf(task.name, shared),
         jobs,
-        results: new Array(jobs.length),
+        results: new Array(jobs.length).fill(undefined),
         hooks,
         resolve: (results) => resolve(results as (Result | undefined)[]),
         reject,

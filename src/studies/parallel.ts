@@ -32,7 +32,8 @@ export function leadingResults<Result>(results: readonly (Result | undefined)[])
 /** A parallel map in the thread at hand, giving way between jobs so that a stop can be noticed. */
 export const mapInline: ParallelMap = async (task, shared, jobs, hooks = {}) => {
   const run = await task.prepare(shared)
-  const results = new Array(jobs.length)
+  // Filled, so that what is not run is undefined and not a hole that array methods pass over.
+  const results = new Array(jobs.length).fill(undefined)
   for (let k = 0; k < jobs.length; k++) {
     if (hooks.stopped?.()) break
     results[k] = await run(jobs[k])

@@ -8,6 +8,7 @@ import { findParameter } from '../stack/parameters.js'
 import type { Limit, MetricRequest, Objective, OptimizeQuestion, Range, Stack } from '../stack/stack.js'
 import { wavelengthsOf } from '../stack/wavelengths.js'
 import { limitMargin } from './evaluate.js'
+import { type RobustQuestion, underTolerances, underTolerancesWithGradient } from './underTolerances.js'
 
 /** Wavelengths kept for choosing starts: enough to rank them, a quarter of the work. */
 const SCREEN_STRIDE = 4
@@ -38,12 +39,12 @@ export function designProblem(
   wavelengths: Float64Array = wavelengthsOf(stack.conditions),
 ): SearchProblem {
   const coarse = coarseWavelengths(wavelengths)
-  const rough = functionsAt(stack, question, coarse)
   return {
     variables: designVariables(stack, question),
     ...functionsAt(stack, question, wavelengths),
-    screen: rough.objective,
-    rough,
+    // Which starts are worth a polish is told by the design as it is drawn, whatever production makes of it.
+    screen: whenAsked(() => meanOverViews(stack, Object.keys(question.vary), question.minimize, coarse)),
+    rough: functionsAt(stack, question, coarse),
   }
 }
 
@@ -51,15 +52,33 @@ export function designProblem(
 function functionsAt(stack: Stack, question: OptimizeQuestion, wavelengths: Float64Array) {
   const paths = Object.keys(question.vary)
   const { minimize, subject_to } = question
+  const value = (all: readonly string[]) => meanOverViews(stack, all, minimize, wavelengths)
+  const slope = (all: readonly string[]) => gradientOf(stack, all, minimize, wavelengths)
+  const robust = robustQuestion(stack, paths, minimize)
   return {
-    objective: whenAsked(() => meanOverViews(stack, paths, minimize, wavelengths)),
+    objective: whenAsked(() => (robust === undefined ? value(paths) : underTolerances(stack, robust, value))),
     ...(isSpectral(minimize.metric) && {
-      objectiveWithGradient: whenAsked(() => gradientOf(stack, paths, minimize, wavelengths)),
+      objectiveWithGradient: whenAsked(() =>
+        robust === undefined ? slope(paths) : underTolerancesWithGradient(stack, robust, slope),
+      ),
     }),
     ...(subject_to.length > 0 && {
       constraints: whenAsked(() => constraintsOf(stack, paths, subject_to, wavelengths)),
     }),
   }
+}
+
+/** The quantile of the objective under the file's tolerances, where the file asks for it. */
+function robustQuestion(
+  stack: Stack,
+  paths: readonly string[],
+  { quantile, sense }: Objective,
+): RobustQuestion | undefined {
+  if (quantile === undefined) return undefined
+  const { tolerance } = stack
+  if (tolerance === undefined) throw new Error('a quantile needs the tolerances of the stack')
+  // What is maximized is searched as its negative, whose quantiles run the other way.
+  return { tolerance, paths, share: sense === 1 ? quantile : 1 - quantile }
 }
 
 function whenAsked<Args extends unknown[], Result>(make: () => (...args: Args) => Result): (...args: Args) => Result {

@@ -15,6 +15,8 @@ export interface Polarization {
 const LINEAR_RAD = 0.052
 /** Below this the light has no ellipse worth drawing. */
 const UNPOLARIZED = 0.03
+/** Half the length of an arrow head, in glyphs that have room for it. */
+const ARROW_PX = 5
 
 /**
  * The ellipse of the polarized part over a disc whose gray is the unpolarized part. Right-handed light going into the
@@ -48,7 +50,8 @@ export function paintEllipse(
     ellipsePoint([cx, cy], size, state, ((clockwise ? -1 : 1) * 2 * Math.PI * i) / 72),
   )
   strokeLine(pen, outline, { color, width: theme.lineWidth, dash: state.ellipticityRad < -LINEAR_RAD ? [6, 2] : [] })
-  if (Math.abs(state.ellipticityRad) > LINEAR_RAD) paintArrow(pen, outline[8], outline[10], color)
+  if (Math.abs(state.ellipticityRad) > LINEAR_RAD)
+    paintArrow(pen, outline[8], outline[10], Math.min(ARROW_PX, 0.3 * radius), color)
 }
 
 /** Right, left and linear each have a color; the turn of the arrow says it without. */
@@ -65,14 +68,14 @@ function ellipsePoint([cx, cy]: Pixel, size: number, { azimuthRad, ellipticityRa
   return [cx + c * long - s * short, cy - (s * long + c * short)]
 }
 
-function paintArrow(pen: Pen, from: Pixel, to: Pixel, color: string): void {
+function paintArrow(pen: Pen, from: Pixel, to: Pixel, size: number, color: string): void {
   const length = Math.hypot(to[0] - from[0], to[1] - from[1]) || 1
-  const [ux, uy] = [(to[0] - from[0]) / length, (to[1] - from[1]) / length]
+  const [ux, uy] = [(size * (to[0] - from[0])) / length, (size * (to[1] - from[1])) / length]
   pen.fillStyle = color
   pen.beginPath()
-  pen.moveTo(to[0] + 5 * ux, to[1] + 5 * uy)
-  pen.lineTo(to[0] - 5 * ux + 5 * uy, to[1] - 5 * uy - 5 * ux)
-  pen.lineTo(to[0] - 5 * ux - 5 * uy, to[1] - 5 * uy + 5 * ux)
+  pen.moveTo(to[0] + ux, to[1] + uy)
+  pen.lineTo(to[0] - ux + uy, to[1] - uy - ux)
+  pen.lineTo(to[0] - ux - uy, to[1] - uy + ux)
   pen.closePath()
   pen.fill()
 }

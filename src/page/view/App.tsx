@@ -11,6 +11,7 @@ import { Bench } from './Bench.js'
 import { OpenDialog } from './OpenDialog.js'
 import { Problems } from './Problems.js'
 import { chartTheme } from './surround.js'
+import { Timing } from './Timing.js'
 import { Toolbar } from './Toolbar.js'
 import { useKeys } from './useKeys.js'
 
@@ -35,7 +36,12 @@ export function App({ engine }: { readonly engine: Engine }) {
   }, [open?.stack])
 
   const { view, cone } = appearance
-  const present: Shown | undefined = view && { name: 'now', values: history.present, view, cone }
+  const present: Shown | undefined = view && {
+    name: held === undefined ? 'now' : 'after',
+    values: history.present,
+    view,
+    cone,
+  }
   return (
     <>
       <Toolbar
@@ -46,7 +52,7 @@ export function App({ engine }: { readonly engine: Engine }) {
         lighting={lighting}
         onLighting={switchLighting}
         onOpen={places.ask}
-        onHold={() => hold(held === undefined && present !== undefined ? { ...present, name: 'held' } : undefined)}
+        onHold={() => hold(held === undefined && present !== undefined ? { ...present, name: 'before' } : undefined)}
       />
       {places.asking && <OpenDialog places={places} />}
       <main>
@@ -66,6 +72,7 @@ export function App({ engine }: { readonly engine: Engine }) {
             theme={theme}
           />
         )}
+        {view !== undefined && <Timing viewMs={view.computeMs} coneMs={cone?.computeMs} />}
       </main>
     </>
   )

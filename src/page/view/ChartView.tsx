@@ -28,6 +28,7 @@ export function ChartView({ name, config, label, heightPx }: ChartViewProps) {
 }
 
 function update(chart: Chart, config: ChartConfiguration): void {
+  const start = performance.now()
   const { data, options, plugins } = responsive(config)
   chart.data = data
   chart.options = options ?? {}
@@ -35,6 +36,7 @@ function update(chart: Chart, config: ChartConfiguration): void {
   const own = chart.config.plugins as NonNullable<ChartConfiguration['plugins']>
   own.splice(0, own.length, ...(plugins ?? []))
   chart.update('none')
+  performance.measure('draw', { start, end: performance.now() })
 }
 
 function responsive(config: ChartConfiguration): ChartConfiguration {

@@ -36,7 +36,7 @@ export function Cones({ cones, theme }: ConesProps) {
         {configs.map((config, k) => (
           <ChartView
             key={cones[k].name}
-            name={k === configs.length - 1 ? 'cone' : 'cone-held'}
+            name={k === configs.length - 1 ? 'cone' : 'cone-before'}
             config={config}
             label={`Viewing cone to ${cones[k].cone.theta_deg.at(-1)}°, ${METRIC_QUANTITIES[metric].label}, ${cones[k].name}`}
             heightPx={330}

@@ -3,7 +3,7 @@ import { type Polarization, paintEllipse } from '../../charts/ellipseGlyph.js'
 import type { Theme } from '../../charts/theme.js'
 import type { Pass } from '../../studies/itinerary.js'
 
-const SIZE_PX = 24
+const SIZE_PX = 28
 
 interface EllipseGlyphProps {
   /** Undefined: light of the room, unpolarized. */

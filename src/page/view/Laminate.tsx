@@ -80,7 +80,8 @@ interface FaceProps {
 function Face({ above, below, incoming, returning, theme }: FaceProps) {
   const where = below === '' ? 'in the room' : `between ${above} and ${below}`
   return (
-    <div class="face">
+    <div class={below === '' ? 'face room' : 'face'}>
+      {below === '' && <span>room</span>}
       <EllipseGlyph pass={incoming} goingIn={true} where={where} theme={theme} />
       {returning !== undefined && <EllipseGlyph pass={returning} goingIn={false} where={where} theme={theme} />}
     </div>

@@ -42,6 +42,7 @@ export function Look({ stack, shown, place, onPlace, theme }: LookProps) {
           </label>
         ))}
       </fieldset>
+      <Swatch shown={shown} />
       <div class="card">
         <ChartView
           name="spectrum"
@@ -50,13 +51,10 @@ export function Look({ stack, shown, place, onPlace, theme }: LookProps) {
           heightPx={300}
         />
       </div>
-      <div class="beside">
-        <Swatch shown={shown} />
-        <div class="card">
-          <ChartView name="color" config={color} label={colorLabel(designs)} heightPx={330} />
-        </div>
-      </div>
       {cones.length > 0 && <Cones cones={cones} theme={theme} />}
+      <div class="card">
+        <ChartView name="color" config={color} label={colorLabel(designs)} heightPx={340} />
+      </div>
     </section>
   )
 }

@@ -26,7 +26,7 @@ export function Sheet({ layer, parameters, values, selected, onSelect, onSet }: 
   const thicknessNm = thickness === undefined ? layer.thickness : present(thickness)
   const shown = turns ? [axis, retardance].filter((found) => found !== undefined) : []
   return (
-    <div class={`sheet ${layer.kind}`} style={{ minHeight: `${sheetHeightPx(thicknessNm)}px` }} aria-current={selected}>
+    <div class={`sheet ${layer.kind}`} style={{ height: `${sheetHeightPx(thicknessNm)}px` }} aria-current={selected}>
       <span class="thickness">{thicknessText(thicknessNm)}</span>
       <button type="button" class="sheet-name" aria-expanded={selected} onClick={onSelect}>
         {layer.id.replaceAll('_', ' ')}

@@ -20,7 +20,10 @@ export function spectrumConfig(
 }
 
 export function colorConfig(stack: Stack, designs: readonly NamedEvaluation[], theme: Theme): ChartConfiguration {
-  return offStateColor({ ...colorData(stack, designs), title: 'Color of the off-state' }, theme)
+  const config = offStateColor({ ...colorData(stack, designs), title: 'Color of the off-state' }, theme)
+  // Before and after need to be told apart, a single design needs no legend.
+  Object.assign(config.options?.plugins?.legend ?? {}, { display: designs.length > 1 })
+  return config
 }
 
 export const CONE_METRICS = ['luminous_reflectance', 'chroma'] as const

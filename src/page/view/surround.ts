@@ -28,6 +28,8 @@ export function lightRoom(root: HTMLElement, lighting: Lighting): void {
     sheet: neutralGray(SHEET_LIGHTNESS[lighting]),
     slab: neutralGray(SLAB_LIGHTNESS[lighting]),
     ink,
+    // The slab has inks of its own; what stands in the room above it has this.
+    'room-ink': ink,
     muted,
     faint,
     accent: limit,

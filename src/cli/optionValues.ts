@@ -15,6 +15,11 @@ export function collected(text: string, before: readonly string[] = []): string[
   return [...before, text]
 }
 
+/** The same for values that `parse` makes of the texts. */
+export function collectedAs<Value>(parse: (text: string) => Value) {
+  return (text: string, before: readonly Value[] = []): Value[] => [...before, parse(text)]
+}
+
 /** Parser of an option that takes a quantity between bounds (nm, rad, fractions), both included. */
 export function quantityBetween(kind: QuantityKind, min: number, max: number): (text: string) => number {
   const [least, most] = [min, max].map((bound) => formatQuantity(bound, kind, 6))

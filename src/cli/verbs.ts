@@ -7,7 +7,7 @@ import { REVIEW_PARTS } from '../studies/reviewParts.js'
 import { angleOption } from './angleOption.js'
 import type { VerbModule } from './context.js'
 import { directionOptions } from './directionOptions.js'
-import { collected, namesAmong, quantityBetween, wholeNumber } from './optionValues.js'
+import { collected, collectedAs, namesAmong, quantityBetween, wholeNumber } from './optionValues.js'
 
 export interface Verb {
   readonly name: string
@@ -85,6 +85,19 @@ export const VERBS: readonly Verb[] = [
     options: directionOptions(),
     example: 'budget stacks/dive-computer.stack.yaml --theta 30deg --phi 90deg',
     load: () => import('./verbs/budget.js'),
+  },
+  {
+    name: 'itinerary',
+    summary: 'what happens to the light on its way?',
+    file: 'stack',
+    options: [
+      new Option('--wavelength <length>', 'may be repeated; default 450, 550 and 650 nm').argParser(
+        collectedAs(quantityBetween('length', 200, 2500)),
+      ),
+      ...directionOptions(),
+    ],
+    example: 'itinerary stacks/dive-computer.stack.yaml --wavelength 550nm',
+    load: () => import('./verbs/itinerary.js'),
   },
   {
     name: 'tolerance',

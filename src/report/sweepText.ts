@@ -1,4 +1,4 @@
-import { quantityText } from '../charts/quantity.js'
+import { METRIC_QUANTITIES, quantityText } from '../charts/quantity.js'
 import type { Sweep } from '../studies/sweep.js'
 import { axisQuantity } from './axisQuantity.js'
 import { given } from './decimals.js'
@@ -81,9 +81,12 @@ function rightAligned(headings: readonly string[]): Column[] {
   return headings.map((heading) => ({ heading, align: 'right' }))
 }
 
+/** A contrast needs no unit beside its name. */
 function labelWithUnit(key: string): string {
   const unit = metricKeyUnit(key)
-  return unit === '' ? metricKeyLabel(key) : `${metricKeyLabel(key)}, ${unit}`
+  return unit === '' || unit === METRIC_QUANTITIES.ambient_contrast.unit
+    ? metricKeyLabel(key)
+    : `${metricKeyLabel(key)}, ${unit}`
 }
 
 function extremesText({ axes, metrics }: Sweep): string {

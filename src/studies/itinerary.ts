@@ -10,6 +10,9 @@ import type { Direction, Layer, Stack } from '../stack/stack.js'
 import { degrees } from './evaluate.js'
 import { slicesOf } from './slices.js'
 
+/** A blue, the green of the quoted retardances, a red: common practice, no source. */
+export const USUAL_WAVELENGTHS_NM: readonly number[] = [450, 550, 650]
+
 export interface ItineraryQuestion extends Direction {
   readonly wavelengthsNm: readonly number[]
 }

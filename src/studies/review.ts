@@ -7,7 +7,7 @@ import { type Comparison, compare } from './compare.js'
 import { type Cone, cone } from './cone.js'
 import { type Evaluation, evaluate } from './evaluate.js'
 import type { Hooks } from './hooks.js'
-import { type Itinerary, itinerary } from './itinerary.js'
+import { type Itinerary, itinerary, USUAL_WAVELENGTHS_NM } from './itinerary.js'
 import { type LaminateFacts, laminateFacts } from './laminateFacts.js'
 import { type OffStateSwatch, offStateSwatches } from './offStateSwatches.js'
 import { type Optimum, optimize } from './optimize.js'
@@ -47,8 +47,6 @@ export interface ReviewedDesign {
 
 const DEGREE = Math.PI / 180
 const CONE = { thetaMax: 80 * DEGREE, thetaStep: 5 * DEGREE, phiStep: 10 * DEGREE }
-/** A blue, the green of the quoted retardances, a red: common practice, no source. */
-const ITINERARY_NM = [450, 550, 650]
 /** About how the time divides: search, cones, tolerance, comparison. */
 const STAGES = { search: 0.3, cone: 0.35, tolerance: 0.6 }
 
@@ -112,5 +110,5 @@ function budgetsOf(stack: Stack): Budget[] {
 
 function itineraryOf(stack: Stack): Itinerary {
   const [first] = stack.conditions.directions
-  return itinerary(stack, { ...first, wavelengthsNm: ITINERARY_NM })
+  return itinerary(stack, { ...first, wavelengthsNm: USUAL_WAVELENGTHS_NM })
 }

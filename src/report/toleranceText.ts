@@ -20,7 +20,7 @@ export function toleranceText(stack: Stack, tolerance: Tolerance, paint: Paint =
     metricsText(tolerance),
     heldText(tolerance),
     sensitivityText(tolerance, paint),
-    tolerance.tightening === undefined ? '' : tighteningText(stack, tolerance.tightening, paint),
+    tighteningPart(stack, tolerance, paint),
     tolerance.interrupted ? paint.caution('interrupted: this is what was done so far') : '',
     paint.faint(ESTIMATE_CAUTION),
   ]
@@ -102,6 +102,15 @@ function sensitivityText({ sensitivity, sensitivity_of }: Tolerance, paint: Pain
   ])
   const heading = paint.strong(`what moves ${metricKeyLabel(sensitivity_of)}: shares of its variance`)
   return `${heading}\n${textTable(SHARES, rows)}`
+}
+
+function tighteningPart(stack: Stack, { tightening, design_meets_limits }: Tolerance, paint: Paint): string {
+  if (design_meets_limits === false) {
+    return paint.caution(
+      'The design misses a limit even without errors: no tightening helps, another design might (optimize).',
+    )
+  }
+  return tightening === undefined ? '' : tighteningText(stack, tightening, paint)
 }
 
 function percent(share: number): string {

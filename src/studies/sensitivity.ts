@@ -78,7 +78,7 @@ export async function sensitivity(
     .sort((a, b) => b.total - a.total)
 }
 
-/** A power of two: all replicates together have about as many base points as the question has samples. */
-function replicatePoints(samples: number): number {
+/** Base points of a replicate, a power of two: all replicates together have about as many base points as the question has samples. */
+export function replicatePoints(samples: number): number {
   return 2 ** Math.min(8, Math.max(4, Math.round(Math.log2(samples / REPLICATES))))
 }

@@ -45,9 +45,11 @@ export interface SpreadChange {
   readonly needed?: number
 }
 
-const MOST_DRAWS = 1000
+export const MOST_DRAWS = 1000
 /** Halvings of the scale: to 1/64, finer than so many draws can tell. */
 const HALVINGS = 6
+/** Of the work, about, where all spreads must be halved down. */
+const ENDS_SHARE = 0.3
 const LOSS_ALLOWED = 0.005
 
 interface Bracket {
@@ -145,6 +147,8 @@ function spreadChange({ stack, question }: ToleratedStack, path: string, scale: 
   }
 }
 
+/** Round 0 measures the ends, each later one halves. */
 function roundHooks(hooks: Hooks, round: number): Hooks {
-  return stageHooks(hooks, round / (HALVINGS + 1), (round + 1) / (HALVINGS + 1))
+  const end = (rounds: number) => ENDS_SHARE + ((1 - ENDS_SHARE) * rounds) / HALVINGS
+  return stageHooks(hooks, round === 0 ? 0 : end(round - 1), end(round))
 }

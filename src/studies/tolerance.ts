@@ -1,16 +1,19 @@
 /** How much of production meets the limits, how the metrics spread, which tolerance moves them, and what to tighten. */
+import { Scene } from '../appearance/scene.js'
 import type { Histogram } from '../numeric/distribution.js'
 import type { MetricName, MetricRequest, Stack, ToleranceQuestion } from '../stack/stack.js'
 import { drawAll } from './drawAll.js'
 import { createDrawRows, type DrawRows } from './drawRows.js'
-import type { AskedLimit } from './evaluate.js'
+import { type AskedLimit, evaluateLimit } from './evaluate.js'
 import type { Hooks } from './hooks.js'
 import { metricKey } from './metricKey.js'
 import { mapInline, type ParallelMap } from './parallel.js'
+import type { ToleratedStack } from './scaledYields.js'
 import { type ParameterShare, sensitivity } from './sensitivity.js'
 import { stageHooks } from './stageHooks.js'
 import { type Tightening, tighten } from './tighten.js'
 import type { DrawnBlock } from './toleranceBlock.js'
+import { toleranceStages } from './toleranceStages.js'
 import { isSameMetric, type MetricSpread, ToleranceTally, type Yield } from './toleranceTally.js'
 import { createVariation } from './variation.js'
 
@@ -32,6 +35,8 @@ export interface Tolerance extends Partial<Yield> {
   /** Draws asked for, and made: fewer where it was interrupted. */
   readonly samples: number
   readonly draws: number
+  /** The design without any errors; where it does not, no spread is to blame and nothing is said about tightening. */
+  readonly design_meets_limits?: boolean
   /** With the share of the draws that meets each; absent, as the yield of all, where the file has none. */
   readonly limits?: readonly (AskedLimit & Yield)[]
   readonly metrics: Readonly<Record<string, MetricSpread>>
@@ -49,8 +54,6 @@ export interface Tolerance extends Partial<Yield> {
 /** Told from every direction of the file, beside the metrics of its limits. */
 const TOLD: readonly MetricName[] = ['color_weighted_reflectance', 'luminous_reflectance', 'chroma']
 const WANTED_YIELD = 0.95
-/** About how the work divides: draws, then sensitivity, then what to tighten. */
-const STAGES = [0.25, 0.5] as const
 
 /** Of `question`, by default the stack's own; its paths must be parameters of the stack. */
 export async function tolerance(
@@ -70,13 +73,20 @@ export async function tolerance(
     tally.add(block)
     await settings.onDraws?.(rowsOf(block))
   }
-  const drawsEnd = settings.drawsOnly === true ? 1 : STAGES[0]
-  await drawAll({ stack, question, requests }, take, stageHooks(hooks, 0, drawsEnd, 'draws'), map)
+  const design_meets_limits = meetsLimits(stack)
+  const wantedYield =
+    stack.limits.length > 0 && design_meets_limits ? (settings.wantedYield ?? WANTED_YIELD) : undefined
+  const ends =
+    settings.drawsOnly === true
+      ? ([1, 1] as const)
+      : toleranceStages(stack, question, requests, variation, wantedYield !== undefined)
+  await drawAll({ stack, question, requests }, take, stageHooks(hooks, 0, ends[0], 'draws'), map)
+
   const complete = tally.draws === question.samples
   const explained = settings.explained ?? tally.mostCostly() ?? requests[0]
   const causes =
     complete && settings.drawsOnly !== true
-      ? await findCauses(stack, question, explained, settings.wantedYield ?? WANTED_YIELD, hooks, map)
+      ? await findCauses({ stack, question }, explained, wantedYield, ends, hooks, map)
       : { interrupted: !complete }
   return {
     title: stack.title,
@@ -84,7 +94,10 @@ export async function tolerance(
     seed: question.seed,
     samples: question.samples,
     draws: tally.draws,
-    ...(stack.limits.length > 0 && tally.draws > 0 && { ...tally.yieldOfAll(), limits: tally.limitYields() }),
+    ...(stack.limits.length > 0 && {
+      design_meets_limits,
+      ...(tally.draws > 0 && { ...tally.yieldOfAll(), limits: tally.limitYields() }),
+    }),
     metrics: named(names, tally.spreads()),
     histograms: named(names, tally.histograms()),
     held: tally.heldShares(),
@@ -93,20 +106,26 @@ export async function tolerance(
   }
 }
 
+/** What moves the explained metric; what to tighten where a yield is wanted. */
 async function findCauses(
-  stack: Stack,
-  question: ToleranceQuestion,
+  shared: ToleratedStack,
   explained: MetricRequest,
-  wantedYield: number,
+  wantedYield: number | undefined,
+  [from, to]: readonly [number, number],
   hooks: Hooks,
   map: ParallelMap,
 ): Promise<Pick<Tolerance, 'sensitivity' | 'tightening' | 'interrupted'>> {
-  const [from, to] = STAGES
+  const { stack, question } = shared
   const shares = await sensitivity(stack, question, explained, stageHooks(hooks, from, to, 'sensitivity'), map)
   if (shares === undefined) return { interrupted: true }
-  if (stack.limits.length === 0) return { sensitivity: shares, interrupted: false }
-  const tightening = await tighten({ stack, question }, wantedYield, stageHooks(hooks, to, 1, 'what to tighten'), map)
+  if (wantedYield === undefined) return { sensitivity: shares, interrupted: false }
+  const tightening = await tighten(shared, wantedYield, stageHooks(hooks, to, 1, 'what to tighten'), map)
   return { sensitivity: shares, ...(tightening && { tightening }), interrupted: tightening === undefined }
+}
+
+function meetsLimits(stack: Stack): boolean {
+  const scene = new Scene(stack)
+  return stack.limits.every((limit) => evaluateLimit(scene, stack, limit).met)
 }
 
 /** Each once. */

@@ -30,7 +30,7 @@ const STACK: Stack = stackOf([polarizer(0), retarder('quarter', 45, 137.5)], {
     color_weights: [1, 1, 1],
   },
   panel: { reflectance: 0.5 },
-  limits: [darkerThan(0.005), darkerThan(0.006, 30, 0)],
+  limits: [darkerThan(0.005), darkerThan(0.011, 30, 0)],
   tolerance: QUESTION,
 })
 
@@ -45,7 +45,10 @@ const elsewhere: ParallelMap = async (task, shared, jobs) => {
 describe('the same digits', () => {
   test('on whatever worker the blocks are drawn', async () => {
     const few = { ...QUESTION, samples: 600 }
-    expect(await tolerance(STACK, few, {}, {}, elsewhere)).toEqual(await tolerance(STACK, few))
+    const here = await tolerance(STACK, few)
+    expect(here.yield).toBeLessThan(0.95)
+    expect(here.tightening?.spreads).toHaveLength(4)
+    expect(await tolerance(STACK, few, {}, {}, elsewhere)).toEqual(here)
   })
 
   test.each(['random', 'latin_hypercube', 'sobol'] as const)('%s: wherever a block begins', async (sampling) => {
@@ -80,7 +83,7 @@ test('progress rises to the end', async () => {
   const seen: number[] = []
   await tolerance(STACK, { ...QUESTION, samples: 300 }, {}, { progress: (done) => seen.push(done) })
   expect(seen).toEqual(seen.toSorted((a, b) => a - b))
-  expect(seen.at(-1)).toBeGreaterThan(0.5)
+  expect(seen.at(-1)).toBeGreaterThan(0.3)
 })
 
 test('every draw can be written out, in plain units', async () => {
@@ -127,6 +130,14 @@ describe('yield', () => {
     expect(free.sensitivity_of).toBe('color_weighted_reflectance@0,0')
     expect(free.interrupted).toBe(false)
   })
+})
+
+test('a design that misses a limit by itself: no spread is to blame', async () => {
+  const missed = { ...STACK, limits: [darkerThan(1e-6)] }
+  const told = await tolerance(missed, { ...QUESTION, samples: 64 })
+  expect(told).toMatchObject({ design_meets_limits: false, interrupted: false })
+  expect(told.sensitivity).toHaveLength(3)
+  expect(told.tightening).toBeUndefined()
 })
 
 test('a share is not drawn below 0, and that is told', async () => {

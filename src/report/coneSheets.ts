@@ -29,10 +29,10 @@ function coneSheet({ name, cone }: NamedCone, metric: (typeof METRICS)[number], 
     phiRad: cone.phi_deg.map(radians),
     values: cone[metric],
   }
-  const title = name === '' ? quantity.label : `${quantity.label}, ${name}`
+  const title = `${cone.title}: ${quantity.label}${name === '' ? '' : `, ${name}`}`
   return {
     name: ['cone', metric.replaceAll('_', '-'), ...(name === '' ? [] : [name])].join('-'),
-    chart: viewingCone({ title, notes: [cone.title], quantity, field, range }, PAPER),
+    chart: viewingCone({ title, quantity, field, range }, PAPER),
     width: 720,
     height: 700,
   }

@@ -8,33 +8,68 @@ import { searchSheet } from './searchSheet.js'
 import type { Sheet } from './sheet.js'
 import { toleranceSheets } from './toleranceSheets.js'
 
-/** The charts of a design review by the section they stand in. */
+/** The charts of a design review in groups that stand together. */
 export interface ReviewSheets {
-  readonly appearance: readonly Sheet[]
+  readonly spectra: readonly Sheet[]
+  readonly color: readonly Sheet[]
   readonly search: readonly Sheet[]
   readonly cone: readonly Sheet[]
   readonly budget: readonly Sheet[]
-  readonly itinerary: readonly Sheet[]
-  readonly tolerance: readonly Sheet[]
+  readonly ellipses: readonly Sheet[]
+  readonly spheres: readonly Sheet[]
+  readonly spread: readonly Sheet[]
+  readonly sensitivity: readonly Sheet[]
   readonly compare: readonly Sheet[]
 }
 
 const BEFORE_AND_AFTER = ['before', 'after']
+/** Light whose ellipses are drawn layer by layer, nm; the spheres show the others too. */
+const ELLIPSES_NM = 550
 
-export function reviewSheets({ designs, optimum, budgets, itinerary, tolerance, comparison }: Review): ReviewSheets {
+/** Sizes for two abreast, so that their texts are as large as those of a chart over the whole width, CSS pixels. */
+const HALF = { width: 480, height: 440 }
+const WIDE_HALF = { width: 480, height: 360 }
+/** Three over one another on a page. */
+const LOW = { height: 410 }
+
+export function reviewSheets(review: Review): ReviewSheets {
+  const { title, designs, optimum, budgets, itinerary, tolerance, comparison } = review
   const [{ stack }] = designs
   const names = designs.length > 1 ? BEFORE_AND_AFTER : ['design']
   const evaluations = designs.map(({ evaluation }, k) => ({ name: names[k], evaluation }))
   const cones = designs.flatMap(({ cone }, k) =>
     cone === undefined ? [] : [{ name: designs.length > 1 ? names[k] : '', cone }],
   )
+  const told = (sheets: readonly Sheet[], size = {}): Sheet[] =>
+    sheets.map((sheet) => ({ ...withoutTitle(sheet, title), ...size }))
+  const ways = itinerary === undefined ? [] : itinerarySheets(itinerary)
+  const appearance = appearanceSheets(stack, evaluations)
+  const spread = tolerance === undefined ? [] : toleranceSheets(tolerance)
   return {
-    appearance: appearanceSheets(stack, evaluations),
-    search: optimum === undefined ? [] : [searchSheet(optimum)],
-    cone: cones.length > 0 ? coneSheets(cones) : [],
-    budget: (budgets ?? []).map(budgetSheet),
-    itinerary: itinerary === undefined ? [] : itinerarySheets(itinerary),
-    tolerance: tolerance === undefined ? [] : toleranceSheets(tolerance),
-    compare: comparison === undefined ? [] : [compareSheet(stack, comparison)],
+    spectra: told(appearance.slice(0, -1), LOW),
+    color: told(appearance.slice(-1)),
+    search: told(optimum === undefined ? [] : [searchSheet(optimum)]),
+    cone: told(cones.length > 0 ? coneSheets(cones) : [], HALF),
+    budget: told((budgets ?? []).map(budgetSheet)),
+    ellipses: told(ways.filter(({ name }) => name === `ellipses-${ELLIPSES_NM}nm`)),
+    spheres: told(
+      ways.filter(({ name }) => name.startsWith('sphere')),
+      HALF,
+    ),
+    spread: told(
+      spread.filter(({ name }) => name.startsWith('spread')),
+      WIDE_HALF,
+    ),
+    sensitivity: told(spread.filter(({ name }) => name === 'sensitivity')),
+    compare: told(comparison === undefined ? [] : [compareSheet(stack, comparison)]),
   }
+}
+
+/** The page has said the stack's title: its charts begin with what they show. */
+function withoutTitle(sheet: Sheet, title: string): Sheet {
+  const plugins = sheet.chart.options?.plugins
+  const text = [plugins?.title?.text ?? ''].flat().join(' ')
+  const rest = text.startsWith(title) ? text.slice(title.length).replace(/^(:| —) /, '') : text
+  const options = { ...sheet.chart.options, plugins: { ...plugins, title: { ...plugins?.title, text: [rest] } } }
+  return { ...sheet, chart: { ...sheet.chart, options } }
 }

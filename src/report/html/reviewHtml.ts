@@ -67,23 +67,34 @@ interface Section {
 function sectionsOf(review: Review, { sheets, pictures }: PageParts): Section[] {
   const { designs, tolerance, comparison } = review
   const [first, last] = [designs[0], designs[designs.length - 1]]
-  const charts = (group: readonly Sheet[], look = '') =>
-    html`<div class="charts ${look}">${group.map((sheet) => chartFigure(sheet, pictures.get(sheet.name) ?? ''))}</div>`
-  const [spectra, colors] = [sheets.appearance.slice(0, -1), sheets.appearance.slice(-1)]
+  const charts = (group: readonly Sheet[], look = '', beside?: Content) =>
+    html`<div class="charts ${look}">${group.map((sheet) => chartFigure(sheet, pictures.get(sheet.name) ?? ''))}${beside}</div>`
   const about = designs.length > 1 && html`<p>Of the design after the search.</p>`
   const sections: Section[] = [
     { title: 'What is asked', content: questionSection(review) },
     { title: 'The laminate', content: laminateSvg(last.laminate, first === last ? undefined : first.laminate) },
     { title: 'Figures and limits', content: figuresSection(review) },
     { title: 'Before and after the search', content: join(searchSection(review), charts(sheets.search)) },
-    { title: 'Reflectance spectrum', content: charts(spectra) },
-    { title: 'The off-state, seen', content: [swatchesSection(review), charts(colors, 'single')] },
+    { title: 'Reflectance spectrum', content: charts(sheets.spectra) },
+    { title: 'The off-state, seen', content: [swatchesSection(review), charts(sheets.color, 'single')] },
     { title: 'Viewing cone', content: join(coneSection(review), charts(sheets.cone, 'pairs')) },
     { title: 'Light budget', content: join(budgetSection(review), [about, charts(sheets.budget)]) },
-    { title: 'Itinerary of the light', content: join(itinerarySection(review), [about, charts(sheets.itinerary)]) },
+    {
+      title: 'Itinerary of the light',
+      content: join(itinerarySection(review), [
+        about,
+        charts(sheets.ellipses),
+        charts(sheets.spheres, 'pairs', FIRST_WAY),
+      ]),
+    },
     {
       title: 'Production',
-      content: tolerance && [about, charts(sheets.tolerance, 'pairs'), toleranceSection(last.stack, tolerance)],
+      content: tolerance && [
+        about,
+        charts(sheets.spread, 'pairs'),
+        charts(sheets.sensitivity),
+        toleranceSection(last.stack, tolerance),
+      ],
     },
     {
       title: 'Films compared',
@@ -93,6 +104,8 @@ function sectionsOf(review: Review, { sheets, pictures }: PageParts): Section[] 
   ]
   return sections.filter(({ content }) => content !== undefined)
 }
+
+const FIRST_WAY = html`<p>The first way of unpolarized light from the room to the panel and back; reflections that join it later are left out.</p>`
 
 /** The pictures before the table; nothing where there is no table. */
 function join(text: Markup | undefined, pictures: Content): Content {

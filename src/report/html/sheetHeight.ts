@@ -1,6 +1,6 @@
 /** Scale on which sheets of 10 nm and of 1 mm can be drawn on one another: a constant, and a step for each decade. */
-const LEAST_PX = 30
-const DECADE_PX = 13
+const LEAST_PX = 28
+const DECADE_PX = 11
 /** Thinner sheets are all as high as this one, nm. */
 const THINNEST_NM = 100
 

@@ -50,7 +50,7 @@ td, tbody th { white-space: nowrap; }
 .met::before { content: "✓ "; }
 .charts { display: grid; grid-template-columns: minmax(0, 1fr); gap: 26px 20px; margin: 0 0 24px; }
 .pairs { grid-template-columns: repeat(2, minmax(0, 1fr)); }
-.single { max-width: 720px; }
+.single { max-width: 640px; }
 .chart { position: relative; margin: 0; }
 .chart img, .chart canvas { display: block; width: 100%; height: auto; }
 .laminate { display: block; width: 100%; height: auto; margin-bottom: 20px; font: 13.5px "DejaVu Sans", sans-serif; fill: #1a1a1a; }
@@ -74,20 +74,23 @@ code { font: inherit; }
 @media print {
   body { font-size: 9pt; }
   header, main, footer { padding-left: 0; padding-right: 0; }
-  header { padding: 8mm 8mm 7mm; }
+  header { padding: 6mm 8mm; } h1 { margin: 1mm 0 5mm; }
   h1 { font-size: 16pt; }
   h2 { font-size: 13pt; break-after: avoid; }
   h3 { font-size: 9.5pt; break-after: avoid; }
-  section { padding: 8mm 0 2mm; border: 0; }
+  section { padding: 7mm 0 0; border: 0; }
   .verdict { gap: 4mm 9mm; font-size: 8pt; } .verdict b { font-size: 13pt; } .verdict small { font-size: 9pt; }
-  .wide { overflow: visible; }
+  .wide { overflow: visible; break-inside: avoid; margin-bottom: 5mm; }
+  p { break-inside: avoid; }
+  section > p { break-after: avoid; }
   table { font-size: 8pt; } th, td { padding-right: 4mm; } tr { break-inside: avoid; } caption { break-after: avoid; }
   .note { font-size: 7.5pt; }
   .pairs { grid-template-columns: repeat(2, minmax(0, 1fr)); }
   .chart, .laminate, .row, .booth { break-inside: avoid; }
   .live img { display: block; }
   .live canvas { display: none !important; }
-  .booth { font-size: 7.5pt; } .row { flex-wrap: nowrap; } .row > p { flex: 0 0 42mm; } .patch { height: 20mm; }
-  dl { grid-template-columns: 30mm 1fr; }
+  .booth { font-size: 7.5pt; } .row { flex-wrap: nowrap; } .row > p { flex: 0 0 42mm; } .patch { height: 15mm; } .booth { padding: 4mm 5mm 1mm; } .row { margin-bottom: 3mm; }
+  dl { grid-template-columns: 30mm 1fr; margin-bottom: 2mm; gap: 1mm 4mm; }
+  .single { max-width: 130mm; }
 }
 `

@@ -1,7 +1,7 @@
 import type { Pass } from '../../../studies/itinerary.js'
 import type { Review } from '../../../studies/review.js'
 import { fixed, given } from '../../decimals.js'
-import { html, type Markup } from '../markup.js'
+import type { Markup } from '../markup.js'
 import { figure, numbers, table, words } from '../table.js'
 
 const SHOWN_NM = 550
@@ -10,19 +10,18 @@ const SHOWN_NM = 550
 export function itinerarySection({ itinerary }: Review): Markup | undefined {
   if (itinerary === undefined) return undefined
   const rows = itinerary.passes.filter(({ wavelength_nm }) => wavelength_nm === SHOWN_NM).map(passRow)
-  return html`<p>The first way of unpolarized light from the room to the panel and back; reflections that join it later are left out.</p>
-${table(
-  `State after each layer, ${SHOWN_NM} nm, θ ${given(itinerary.theta_deg)}° φ ${given(itinerary.phi_deg)}°`,
-  [
-    words('layer'),
-    words(''),
-    numbers('flux (%)'),
-    numbers('azimuth (°)'),
-    numbers('ellipticity (°)'),
-    numbers('polarized (%)'),
-  ],
-  rows,
-)}`
+  return table(
+    `State after each layer, ${SHOWN_NM} nm, θ ${given(itinerary.theta_deg)}° φ ${given(itinerary.phi_deg)}°`,
+    [
+      words('layer'),
+      words(''),
+      numbers('flux (%)'),
+      numbers('azimuth (°)'),
+      numbers('ellipticity (°)'),
+      numbers('polarized (%)'),
+    ],
+    rows,
+  )
 }
 
 function passRow({ layer, direction, stokes, azimuth_deg, ellipticity_deg, degree_of_polarization }: Pass) {

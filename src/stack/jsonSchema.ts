@@ -1,6 +1,7 @@
 /** The schemas of stack files and film cards as JSON Schema, so that editors complete and check. */
 import * as z from 'zod'
 import { filmCardSchema } from './schema/filmCard.js'
+import { requires } from './schema/requires.js'
 import { stackSchema } from './schema/stackSchema.js'
 import { NO_FILES } from './stackFiles.js'
 import { TableFiles } from './tableFiles.js'
@@ -37,5 +38,5 @@ function asJsonSchema(schema: z.ZodType): JsonSchema {
 
 /** A layer that names a film card needs to say nothing that the card says. */
 function orFromCard({ required, ...kind }: JsonSchema): JsonSchema {
-  return { ...kind, anyOf: [{ required: required ?? [] }, { required: ['id', 'film'] }] }
+  return { ...kind, anyOf: [requires(...(required ?? [])), requires('id', 'film')] }
 }

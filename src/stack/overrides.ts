@@ -100,13 +100,14 @@ class NoPlace extends Error {
 
 function setAt(node: unknown, [key, ...rest]: readonly PathKey[], value: unknown): unknown {
   if (key === undefined) return value
-  if (Array.isArray(node)) {
-    if (typeof key !== 'number' || key > node.length) throw new NoPlace(listFault(key, node.length))
-    const copy = [...node]
-    copy[key] = setAt(node[key], rest, value)
+  const isNew = node === undefined || node === null
+  if (Array.isArray(node) || (isNew && typeof key === 'number')) {
+    const copy = isNew ? [] : [...(node as unknown[])]
+    if (typeof key !== 'number' || key > copy.length) throw new NoPlace(listFault(key, copy.length))
+    copy[key] = setAt(copy[key], rest, value)
     return copy
   }
-  if (node === undefined || node === null) return { [key]: setAt(undefined, rest, value) }
+  if (isNew) return { [key]: setAt(undefined, rest, value) }
   if (!isMapping(node)) throw new NoPlace(scalarFault(key, node))
   return { ...node, [key]: setAt(Object.hasOwn(node, key) ? node[key] : undefined, rest, value) }
 }

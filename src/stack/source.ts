@@ -77,6 +77,7 @@ export class Source {
   }
 
   private yamlProblem({ code, message, pos }: { code: string; message: string; pos: [number, number] }): Problem {
+    if (message.includes('call stack')) return this.problem(depthFault(), [])
     return {
       severity: 'error',
       code: code === 'DUPLICATE_KEY' ? 'duplicate_key' : 'yaml',
@@ -104,7 +105,6 @@ const NEXT_STEPS: Readonly<Record<string, string>> = {
 
 function sentenceOf(code: string, message: string): string {
   if (code === 'DUPLICATE_KEY') return 'the same key stands twice in one mapping'
-  if (message.includes('call stack')) return depthFault().message
   const first = message.split('\n')[0]
   return first.charAt(0).toLowerCase() + first.slice(1)
 }

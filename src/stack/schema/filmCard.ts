@@ -2,6 +2,7 @@ import * as z from 'zod'
 import type { TableFiles } from '../tableFiles.js'
 import { filmFields } from './layer.js'
 import { indexSchema } from './refractiveIndex.js'
+import { requires } from './requires.js'
 
 /** Keys of a card that say something about the film on offer, not about its optics. */
 export const CARD_KEYS = ['format', 'name', 'maker', 'price_per_m2', 'notes'] as const
@@ -31,7 +32,7 @@ export function filmCardSchema(files: TableFiles) {
         z.strictObject({ ...head, kind: z.literal('isotropic'), ...fields.isotropic }).meta({ title: 'Coating' }),
         z
           .strictObject({ ...head, kind: z.literal('retarder'), ...fields.retarder })
-          .meta({ title: 'Retardation film', not: { required: ['nz', 'rth'] } }),
+          .meta({ title: 'Retardation film', not: requires('nz', 'rth') }),
         z.strictObject({ ...head, kind: z.literal('polarizer'), ...fields.polarizer }).meta({ title: 'Polarizer' }),
         z.strictObject({ ...head, kind: z.literal('crystal'), ...fields.crystal }).meta({ title: 'Crystal' }),
       ],

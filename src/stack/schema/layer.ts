@@ -6,6 +6,7 @@ import type { Layer } from '../stack.js'
 import type { TableFiles } from '../tableFiles.js'
 import { numberSchema, quantitySchema, report } from './quantity.js'
 import { DEFAULT_INDEX, type indexSchema } from './refractiveIndex.js'
+import { requires } from './requires.js'
 import { fileTable, inlineTable, spectrumSchema } from './spectrum.js'
 
 /** Layers thinner than this are coherent unless the file says otherwise, nm. */
@@ -175,7 +176,7 @@ export function layerSchema(files: TableFiles, index: ReturnType<typeof indexSch
         slow_axis: angle('Azimuth of the slow axis, counter-clockwise as the viewer sees it.'),
         ...fields.retarder,
       })
-      .meta({ title: 'Retardation film', not: { required: ['nz', 'rth'] } }),
+      .meta({ title: 'Retardation film', not: requires('nz', 'rth') }),
     z
       .strictObject({
         ...head,

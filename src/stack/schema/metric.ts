@@ -5,6 +5,7 @@ import { METRIC_LIMITS } from '../metricQuantity.js'
 import { type Limit, METRIC_NAMES, type MetricName } from '../stack.js'
 import { phi, theta } from './conditions.js'
 import { quantitySchema, readQuantity, report } from './quantity.js'
+import { requires } from './requires.js'
 
 export const metric = z
   .enum(METRIC_NAMES)
@@ -49,7 +50,7 @@ export const limitSchema = z
   })
   .meta({
     title: 'Limit',
-    anyOf: [{ required: ['max'] }, { required: ['min'] }],
+    anyOf: [requires('max'), requires('min')],
     examples: [{ metric: 'luminous_reflectance', max: '5 %' }],
   })
 

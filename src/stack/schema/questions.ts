@@ -6,6 +6,7 @@ import type { CompareQuestion, FitQuestion, Objective, OptimizeQuestion, Toleran
 import { phi, theta } from './conditions.js'
 import { illuminance, limitSchema, metric } from './metric.js'
 import { numberSchema, quantitySchema, report } from './quantity.js'
+import { requires } from './requires.js'
 import { rangesSchema, spreadsSchema } from './vary.js'
 
 const view = z.strictObject({
@@ -37,8 +38,8 @@ const objective = z
 export const optimizeSchema = z
   .strictObject({
     vary: rangesSchema,
-    minimize: objective.optional(),
-    maximize: objective.optional(),
+    minimize: objective.optional().meta({ description: 'What is to become small.' }),
+    maximize: objective.optional().meta({ description: 'What is to become large.' }),
     subject_to: z.array(limitSchema).max(200).prefault([]).meta({ description: 'Limits the design must keep.' }),
   })
   .transform(({ vary, minimize, maximize, subject_to }, context): OptimizeQuestion => {
@@ -53,7 +54,7 @@ export const optimizeSchema = z
   })
   .meta({
     description: 'Which angles and retardances?',
-    oneOf: [{ required: ['minimize'] }, { required: ['maximize'] }],
+    oneOf: [requires('minimize'), requires('maximize')],
   })
 
 function aimFault(received: string): Fault {

@@ -42,11 +42,13 @@ function complexSchema(files: TableFiles) {
 
 const cauchySchema = z
   .strictObject({
-    cauchy_nm: z.tuple([
-      numberSchema(FIELD_LIMITS.cauchy_nm, 'A.', 1.48),
-      numberSchema(FIELD_LIMITS.cauchy_nm, 'B in nm².', 4000),
-      numberSchema(FIELD_LIMITS.cauchy_nm, 'C in nm⁴.', 0),
-    ]),
+    cauchy_nm: z
+      .tuple([
+        numberSchema(FIELD_LIMITS.cauchy_nm, 'A.', 1.48),
+        numberSchema(FIELD_LIMITS.cauchy_nm, 'B in nm².', 4000),
+        numberSchema(FIELD_LIMITS.cauchy_nm, 'C in nm⁴.', 0),
+      ])
+      .meta({ description: 'A, B in nm², C in nm⁴.' }),
   })
   .meta({
     title: 'Cauchy’s formula',
@@ -55,14 +57,18 @@ const cauchySchema = z
   })
 
 const materialSchema = z
-  .strictObject({ material: z.enum(MATERIAL_NAMES as [string, ...string[]], { error: () => MATERIALS }) })
+  .strictObject({
+    material: z
+      .enum(MATERIAL_NAMES as [string, ...string[]], { error: () => MATERIALS })
+      .meta({ description: 'Name of the material.' }),
+  })
   .meta({
     title: 'Published material',
     description: 'Published data with their source.',
     examples: [{ material: 'tac' }],
   })
 
-const formulaSchema = z.strictObject({ formula: z.string().min(1) }).meta({
+const formulaSchema = z.strictObject({ formula: z.string().min(1).meta({ description: 'n over wavelength.' }) }).meta({
   title: 'Formula',
   description: 'Expression for n in wavelength_nm or wavelength_um.',
   examples: [{ formula: '1.5 + 4500 / wavelength_nm^2' }],
@@ -70,7 +76,7 @@ const formulaSchema = z.strictObject({ formula: z.string().min(1) }).meta({
 
 function fileSchema(files: TableFiles) {
   return z
-    .strictObject({ file: z.string().min(1) })
+    .strictObject({ file: z.string().min(1).meta({ description: 'Path of the CSV file, relative to this file.' }) })
     .transform(({ file }, context): IndexLaw => {
       const result = files.index(file)
       if ('table' in result) return result.table

@@ -16,8 +16,12 @@ export function inlineTable(limits: Limits, example: readonly string[]) {
       wavelength_nm: z
         .array(quantitySchema(TABLE_WAVELENGTH, 'Wavelength.', '550 nm'))
         .min(1)
-        .max(MOST_POINTS),
-      value: z.array(quantitySchema(limits, 'Value at the wavelength of the same position.', example[0])).min(1),
+        .max(MOST_POINTS)
+        .meta({ description: 'Wavelengths, ascending.' }),
+      value: z
+        .array(quantitySchema(limits, 'Value at the wavelength of the same position.', example[0]))
+        .min(1)
+        .meta({ description: 'As many values.' }),
     })
     .transform((table, context): SpectrumTable => {
       const { fault, path } = tableFault(table)
@@ -47,7 +51,7 @@ function tableFault({ wavelength_nm, value }: SpectrumTable): { fault?: Fault; p
 /** `{file: x.csv}`: two columns, wavelength and value. */
 export function fileTable(limits: Limits, files: TableFiles) {
   return z
-    .strictObject({ file: z.string().min(1) })
+    .strictObject({ file: z.string().min(1).meta({ description: 'Path of the CSV file, relative to this file.' }) })
     .transform(({ file }, context): SpectrumTable => {
       const result = files.spectrum(file)
       if ('fault' in result) {

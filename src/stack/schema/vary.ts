@@ -7,14 +7,18 @@ import { type Limits, readQuantity, report } from './quantity.js'
 /** Units are read when the path is known: it tells what is measured. */
 const raw = z.union([z.number(), z.string()], { error: () => 'a number with its unit, such as 45 deg or 138 nm' })
 
+const described = (description: string) => raw.meta({ description })
+
 const MOST_VALUES = 1000
 
 const range = z
   .union(
     [
-      z.strictObject({ from: raw, to: raw }).meta({ title: 'Bounds', examples: [{ from: '0 deg', to: '180 deg' }] }),
       z
-        .strictObject({ values: z.array(raw).min(1).max(MOST_VALUES) })
+        .strictObject({ from: described('Lower bound.'), to: described('Upper bound.') })
+        .meta({ title: 'Bounds', examples: [{ from: '0 deg', to: '180 deg' }] }),
+      z
+        .strictObject({ values: z.array(raw).min(1).max(MOST_VALUES).meta({ description: 'The values.' }) })
         .meta({ title: 'Values on offer', examples: [{ values: ['15 deg', '45 deg', '75 deg'] }] }),
       z
         .array(raw)
@@ -36,17 +40,31 @@ export const rangesSchema = pathRecord(range, readRange).meta({
 const spread = z
   .union(
     [
-      z.strictObject({ normal: raw, limit: raw.optional() }).meta({
-        title: 'Normal',
-        description: 'Standard deviation, cut off at ± limit.',
-        examples: [{ normal: '2 nm' }],
-      }),
       z
-        .strictObject({ uniform: raw })
+        .strictObject({
+          normal: described('Standard deviation.'),
+          limit: described('Cut off beyond ± this.').optional(),
+        })
+        .meta({
+          title: 'Normal',
+          description: 'Standard deviation, cut off at ± limit.',
+          examples: [{ normal: '2 nm' }],
+        }),
+      z
+        .strictObject({ uniform: described('Half-width.') })
         .meta({ title: 'Uniform', description: 'Half-width.', examples: [{ uniform: '0.5 deg' }] }),
-      z.strictObject({ triangular: raw }).meta({ title: 'Triangular', description: 'Half-width.' }),
       z
-        .strictObject({ offset: z.array(raw).min(2).max(MOST_VALUES), density: z.array(z.number().min(0)).min(2) })
+        .strictObject({ triangular: described('Half-width.') })
+        .meta({ title: 'Triangular', description: 'Half-width.' }),
+      z
+        .strictObject({
+          offset: z
+            .array(raw)
+            .min(2)
+            .max(MOST_VALUES)
+            .meta({ description: 'Offsets from the file’s value, ascending.' }),
+          density: z.array(z.number().min(0)).min(2).meta({ description: 'How frequent each is, relative.' }),
+        })
         .meta({ title: 'Measured', description: 'Offsets from the file’s value and how frequent they are.' }),
     ],
     {

@@ -14,7 +14,7 @@ export function itinerarySheets(itinerary: Itinerary): Sheet[] {
   const wavelengths = [...new Set(itinerary.passes.map(({ wavelength_nm }) => wavelength_nm))]
   return wavelengths.flatMap((nm) => {
     const passes = itinerary.passes.filter(({ wavelength_nm }) => wavelength_nm === nm)
-    const title = `${itinerary.title}: ${given(nm)} nm, θ ${given(itinerary.theta_deg)}° φ ${given(itinerary.phi_deg)}°`
+    const title = `${itinerary.title}: ${given(nm)}\u00a0nm, θ ${given(itinerary.theta_deg)}° φ ${given(itinerary.phi_deg)}°`
     return [ellipseSheet(passes, title, nm), sphereSheet(passes, title, nm)]
   })
 }

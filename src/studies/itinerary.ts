@@ -2,11 +2,9 @@
  * What happens to the light on its way: the state of polarization after each layer, going in and coming back, on the
  * first pass (reflections that join later left out). Flux is relative to what fell on the screen.
  */
-import { meanIndexOf } from '../appearance/meanIndex.js'
 import { Scene } from '../appearance/scene.js'
-import { indexAt } from '../materials/indexAt.js'
-import { firstPass } from '../optics/firstPass.js'
-import type { Direction, Layer, Stack } from '../stack/stack.js'
+import { firstPass, type PassedLight } from '../optics/firstPass.js'
+import type { Direction, Stack } from '../stack/stack.js'
 import { degrees } from './evaluate.js'
 import { slicesOf } from './slices.js'
 
@@ -55,36 +53,31 @@ export function itinerary(stack: Stack, { wavelengthsNm, theta, phi }: Itinerary
   }
 }
 
-/** A medium the light stands in, and the layer it belongs to. */
+/** A place on the way, and the layer it belongs to. */
 interface Station {
   readonly layer: string
-  readonly index: number
   /** In the middle of a film. */
   readonly within: boolean
 }
 
-function passesAt(stack: Stack, wavelength_nm: number, { theta, phi }: Direction): Pass[] {
-  const wavelength = Float64Array.of(wavelength_nm)
+function passesAt(stack: Stack, wavelength_nm: number, direction: Direction): Pass[] {
   const slices = stack.layers.map((layer) => slicesOf(layer, wavelength_nm))
-  const { solver } = new Scene(stack, wavelength).look({ ...stack, layers: slices.flat() }, theta, phi)
+  const scene = new Scene(stack, Float64Array.of(wavelength_nm))
+  const { solver } = scene.look({ ...stack, layers: slices.flat() }, direction.theta, direction.phi)
   const { down, up } = firstPass(solver)
-  const films = stack.layers.map((layer, k) => stations(layer, slices[k].length, wavelength))
-  const { panel } = stack
-  const immersion = panel.kind === 'mirror' ? indexAt(panel.index, wavelength).n[0] : (films.at(-1)?.[0].index ?? 1)
-  const end = { layer: 'panel', index: immersion, within: false }
-  const air = { layer: 'air', index: 1, within: false }
-  const at = (light: Float64Array, station: Station, sense: 1 | -1) => ({
+  const films = stack.layers.map(({ id }, k) => stations(id, slices[k].length))
+  const [end, air] = [stations('panel', 1), stations('air', 1)]
+  const at = (light: PassedLight, station: Station, sense: 1 | -1) => ({
     station,
-    stokes: stokesOf(light, sense, station.index, { theta, phi }),
+    stokes: stokesOf(light, sense, direction),
   })
-  const inward = [...films.flat(), end].map((station, k) => at(down[k], station, 1))
-  const outward = [end, ...films.toReversed().flat(), air].map((station, k) => at(up[k], station, -1))
+  const inward = [...films, end].flat().map((station, k) => at(down[k], station, 1))
+  const outward = [end, ...films.toReversed(), air].flat().map((station, k) => at(up[k], station, -1))
   return [...passes(inward, 'in'), ...passes(outward, 'out')].map((pass) => ({ wavelength_nm, ...pass }))
 }
 
-function stations(layer: Layer, count: number, wavelength: Float64Array): Station[] {
-  const index = meanIndexOf(layer, wavelength)[0]
-  return Array.from({ length: count }, (_, k) => ({ layer: layer.id, index, within: k < count - 1 }))
+function stations(layer: string, count: number): Station[] {
+  return Array.from({ length: count }, (_, k) => ({ layer, within: k < count - 1 }))
 }
 
 /** Gathers what lies inside a film under the pass that leaves it. */
@@ -115,7 +108,8 @@ function passes(
  * the light that fell on the screen; turned from the plane of incidence into the display's frame. `sense` is +1 for light
  * going in (along the solver's z), -1 coming out: the hand is named along the propagation.
  */
-function stokesOf([x, y, u, v]: Float64Array, sense: 1 | -1, index: number, { theta, phi }: Direction): Stokes {
+function stokesOf({ coherency, index: [index] }: PassedLight, sense: 1 | -1, { theta, phi }: Direction): Stokes {
+  const [x, y, u, v] = coherency
   const sin = Math.sin(theta) / index
   const cos = Math.sqrt(Math.max(0, 1 - sin * sin))
   const scale = index / Math.cos(theta)

@@ -140,6 +140,22 @@ describe('seen obliquely', () => {
   })
 })
 
+describe('energy', () => {
+  it.each([0, 50])('is never gained on the way, at %d°', (thetaDeg) => {
+    const layers = [
+      glass('hard', 1.6),
+      { ...polarizer(0, 0.92, 1e-3), index: 1.5, thickness: 12e3 },
+      retarder('half', 16, 270, { index: 1.53, thickness: 30e3, nz: 1.2 }),
+      glass('adhesive', 1.47),
+      retarder('quarter', 74, 140, { index: 1.53, thickness: 25e3 }),
+    ]
+    const stack = stackOf(layers, { panel: { index: 1.55, reflectance: 0.45 } })
+    const { passes } = itinerary(stack, { wavelengthsNm: [550], theta: thetaDeg * DEG, phi: 1 })
+    const fluxes = [1, ...passes.map(({ stokes }) => stokes[0])]
+    for (let k = 1; k < fluxes.length; k++) expect(fluxes[k]).toBeLessThanOrEqual(fluxes[k - 1] + 1e-12)
+  })
+})
+
 describe('over a metal', () => {
   it('the panel is its face: aluminum at 600 nm, 1.26232 + 7.1855i, returns 0.91103 (handbook value of the bare face)', () => {
     const metal = { kind: 'metal', index: { n: 1.26232, k: 7.1855 } } as const

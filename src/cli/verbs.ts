@@ -100,6 +100,20 @@ export const VERBS: readonly Verb[] = [
     load: () => import('./verbs/itinerary.js'),
   },
   {
+    name: 'eyewear',
+    summary: 'what do polarized sunglasses leave of the lit screen?',
+    file: 'stack',
+    options: [
+      ...directionOptions(),
+      angleOption('--roll-step <angle>', 'between rolls of the lens, which divide half a turn evenly', 0.5, 90, 5),
+      new Option('--lens-leakage <share>', 'transmittance of the lens across its axis over that along it')
+        .argParser(quantityBetween('share', 0, 1))
+        .default(0),
+    ],
+    example: 'eyewear stacks/regatta-watch.stack.yaml',
+    load: () => import('./verbs/eyewear.js'),
+  },
+  {
     name: 'tolerance',
     summary: 'how much of production passes, and what to tighten?',
     file: 'stack',

@@ -48,6 +48,7 @@ export async function run(context: Context<ToleranceOptions>): Promise<ExitCode>
           ...(await chartFiles(stem, toleranceSheets(found))),
         ]),
     )
+    if (options.out !== undefined) terminal.note(`  ${stem}.draws.csv\n`)
     if (found.interrupted) return EXIT.interrupted
     return found.yield === undefined || found.yield >= wantedYield ? EXIT.done : EXIT.limitMissed
   } finally {

@@ -40,7 +40,7 @@ export function Toolbar({ design, search, present, held, lighting, onLighting, o
         </button>
         {held !== undefined && (
           <button type="button" onClick={() => design.set(heldAgain(held, design))}>
-            back to held
+            back to before
           </button>
         )}
         {running === undefined ? (

@@ -15,7 +15,7 @@ export interface CsvFault extends Fault {
 }
 
 /** Largest CSV read, characters, and most rows. */
-export const CSV_LIMITS = { characters: 20_000_000, rows: 500_000 } as const
+const CSV_LIMITS = { characters: 20_000_000, rows: 500_000 } as const
 
 /**
  * Reads a table of numbers as spreadsheets and spectrophotometers write them: byte-order mark, comma, semicolon or tab

@@ -108,8 +108,9 @@ function valueFault(issue: Issue, received: unknown): Fault {
     next: 'write it in the allowed form',
   }
   if (issue.code === 'too_big' || issue.code === 'too_small') {
-    const message = issue.code === 'too_big' ? 'there is too much of it' : 'there is too little of it'
-    return { ...fault, code: issue.code === 'too_big' ? 'too_large' : 'wrong_length', message, next: 'mind the bound' }
+    const [code, size] = issue.code === 'too_big' ? ['too_large', 'long'] : ['wrong_length', 'short']
+    const what = issue.origin === 'string' ? 'text' : 'list'
+    return { ...fault, code, message: `the ${what} is too ${size}`, next: `make the ${what} fit` }
   }
   return issue.code === 'invalid_value' ? unknownName(received, issue.values.map(String), issue.message) : fault
 }

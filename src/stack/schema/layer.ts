@@ -13,7 +13,7 @@ import { fileTable, inlineTable, spectrumSchema } from './spectrum.js'
 const THICK_FROM_NM = 5000
 
 /** First words of paths that are no layer. */
-export const RESERVED_IDS: readonly string[] = [
+const RESERVED_IDS: readonly string[] = [
   'panel',
   'emission',
   'conditions',
@@ -199,7 +199,7 @@ export function layerSchema(files: TableFiles, index: ReturnType<typeof indexSch
     .transform((layer, context): Layer => finish(layer, context))
 }
 
-export const LAYER_KINDS = ['isotropic', 'retarder', 'polarizer', 'crystal'] as const
+const LAYER_KINDS = ['isotropic', 'retarder', 'polarizer', 'crystal'] as const
 
 type WithoutCoherent<L> = L extends Layer ? Omit<L, 'coherent'> & { readonly coherent?: boolean } : never
 

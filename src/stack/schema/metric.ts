@@ -1,8 +1,8 @@
 import * as z from 'zod'
 import type { Fault } from '../fault.js'
 import { CONDITION_LIMITS } from '../fieldLimits.js'
-import { METRIC_LIMITS } from '../metricQuantity.js'
-import { type Limit, METRIC_NAMES, type MetricName } from '../stack.js'
+import { METRIC_LIMITS } from '../metricLimits.js'
+import { type Limit, METRIC_NAMES } from '../stack.js'
 import { phi, theta } from './conditions.js'
 import { quantitySchema, readQuantity, report } from './quantity.js'
 import { requires } from './requires.js'
@@ -60,8 +60,4 @@ function noBound(): Fault {
 
 function contradiction(received: string): Fault {
   return { code: 'empty_range', message: 'no value can meet this limit', received, allowed: 'min at most max' }
-}
-
-export function isContrast(name: MetricName): boolean {
-  return name === 'ambient_contrast'
 }

@@ -5,7 +5,7 @@ import type { TableFiles } from '../tableFiles.js'
 import { DEFAULT_INDEX, type indexSchema } from './refractiveIndex.js'
 import { spectrumSchema } from './spectrum.js'
 
-export const PANEL_KINDS = ['mirror', 'metal'] as const
+const PANEL_KINDS = ['mirror', 'metal'] as const
 
 export function panelSchema(files: TableFiles, index: ReturnType<typeof indexSchema>) {
   const mirror = z

@@ -100,7 +100,7 @@ export function rangeFault(raw: unknown, value: number, limits: Limits): Fault |
   }
 }
 
-export function rangeText({ min, max, open, quantity }: Limits): string {
+function rangeText({ min, max, open, quantity }: Limits): string {
   const from = limitText(min, quantity)
   const to = limitText(max, quantity)
   return `${open === 'min' ? 'more than' : 'from'} ${from} ${open === 'max' ? 'to below' : 'to'} ${to}`

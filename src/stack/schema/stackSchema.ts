@@ -10,7 +10,7 @@ import { quantitySchema } from './quantity.js'
 import { compareSchema, fitSchema, optimizeSchema, toleranceSchema } from './questions.js'
 import { indexSchema } from './refractiveIndex.js'
 
-export const MOST_LAYERS = 2000
+const MOST_LAYERS = 2000
 const MOST_LEVELS = 20
 
 /** Sections of the file. */

@@ -7,9 +7,9 @@ export function budgetCsv({ terms, ideal, rest, total }: Budget): string {
     ['term', 'alone', 'if_removed'],
     [
       ...terms.map(({ name, alone, if_removed }) => [name, alone, if_removed]),
-      ['ideal', ideal],
-      ['rest', rest],
-      ['total', total],
+      ['ideal', ideal, undefined],
+      ['rest', rest, undefined],
+      ['total', total, undefined],
     ],
   )
 }

@@ -7,6 +7,8 @@ import type { Review } from '../studies/review.js'
 
 /** Canvas pixels per pixel of the sheet, so that a sheet shown larger than it is stays sharp. */
 const LEAST_RATIO = 2
+/** A chart is made when it comes this near to being seen: all at once would hold up the page. */
+const AHEAD = '800px'
 
 async function showCharts(): Promise<void> {
   const data = document.getElementById(DATA_ID)?.textContent
@@ -15,13 +17,23 @@ async function showCharts(): Promise<void> {
   // A canvas does not wait for the faces of the page.
   await Promise.all(['normal', 'bold'].map((weight) => document.fonts.load(`${weight} 14px "DejaVu Sans"`)))
   const groups: readonly (readonly Sheet[])[] = Object.values(reviewSheets(JSON.parse(data) as Review))
-  for (const sheet of groups.flat()) showChart(sheet)
+  const sheets = new Map(groups.flat().map((sheet) => [sheet.name, sheet]))
+  const watch = new IntersectionObserver(
+    (entries) => {
+      for (const { isIntersecting, target } of entries) {
+        const sheet = target instanceof HTMLElement ? sheets.get(target.dataset.chart ?? '') : undefined
+        if (!isIntersecting || sheet === undefined) continue
+        watch.unobserve(target)
+        showChart(target, sheet)
+      }
+    },
+    { rootMargin: AHEAD },
+  )
+  for (const figure of document.querySelectorAll('figure[data-chart]')) watch.observe(figure)
 }
 
 /** The picture stays for print, and for what reads the page aloud. */
-function showChart({ name, chart, width, height }: Sheet): void {
-  const figure = document.querySelector(`figure[data-chart="${CSS.escape(name)}"]`)
-  if (figure === null) return
+function showChart(figure: Element, { name, chart, width, height }: Sheet): void {
   const canvas = document.createElement('canvas')
   canvas.width = width
   canvas.height = height

@@ -1,7 +1,7 @@
 import type { Review } from '../studies/review.js'
 import { appearanceSheets } from './appearanceSheets.js'
 import { budgetSheet } from './budgetSheet.js'
-import { compareSheet } from './compareSheet.js'
+import { compareSheets } from './compareSheets.js'
 import { coneSheets } from './coneSheets.js'
 import { itinerarySheets } from './itinerarySheets.js'
 import { searchSheet } from './searchSheet.js'
@@ -61,7 +61,7 @@ export function reviewSheets(review: Review): ReviewSheets {
       WIDE_HALF,
     ),
     sensitivity: told(spread.filter(({ name }) => name === 'sensitivity')),
-    compare: told(comparison === undefined ? [] : [compareSheet(stack, comparison)]),
+    compare: told(comparison === undefined ? [] : compareSheets(stack, comparison)),
   }
 }
 
@@ -70,6 +70,13 @@ function withoutTitle(sheet: Sheet, title: string): Sheet {
   const plugins = sheet.chart.options?.plugins
   const text = [plugins?.title?.text ?? ''].flat().join(' ')
   const rest = text.startsWith(title) ? text.slice(title.length).replace(/^(:| —) /, '') : text
-  const options = { ...sheet.chart.options, plugins: { ...plugins, title: { ...plugins?.title, text: [rest] } } }
+  const options = {
+    ...sheet.chart.options,
+    plugins: { ...plugins, title: { ...plugins?.title, text: [capitalized(rest)] } },
+  }
   return { ...sheet, chart: { ...sheet.chart, options } }
+}
+
+function capitalized(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1)
 }

@@ -1,5 +1,6 @@
 /**
- * An SVG picture in fewer bytes: coordinates to a hundredth of a pixel, and paths in relative steps. A step is counted from
+ * An SVG picture in fewer bytes: coordinates to a hundredth of a pixel (a tenth in polylines, which hold no
+ * letters), and paths in relative steps. A step is counted from
  * where the rounded path stands, so that roundings do not add up. Paths are those the canvas writes: M, L, Q, C and Z alone,
  * absolute.
  */
@@ -12,6 +13,9 @@ export function compactSvg(svg: string): string {
     .replace(/(-?\d+\.\d{3,})/g, (number) => shortNumber(Number(number)))
 }
 
+/** Steps to a pixel. */
+const HUNDREDTHS = 100
+const TENTHS = 10
 const COMMAND = /([MLQCZ])([^MLQCZ]*)/g
 const NUMBER = /-?\d*\.?\d+(?:e[+-]?\d+)?/g
 
@@ -20,6 +24,8 @@ function compactPath(path: string): string {
   let [startX, startY] = [0, 0]
   let text = ''
   let before = ''
+  const grid = /[QC]/.test(path) ? HUNDREDTHS : TENTHS
+  const rounded = (value: number): number => Math.round(grid * value) / grid
   for (const [, command, tail] of path.matchAll(COMMAND)) {
     const absolute = (tail.match(NUMBER) ?? []).map((number) => rounded(Number(number)))
     const steps = absolute.map((value, k) => rounded(value - (k % 2 === 0 ? x : y)))
@@ -42,11 +48,7 @@ function joined(letter: string, numbers: readonly number[]): string {
   }, letter)
 }
 
-function rounded(value: number): number {
-  return Math.round(100 * value) / 100
-}
-
 /** Without the zero before the point. */
 function shortNumber(value: number): string {
-  return String(rounded(value)).replace(/^(-?)0\./, '$1.')
+  return String(Math.round(HUNDREDTHS * value) / HUNDREDTHS).replace(/^(-?)0\./, '$1.')
 }

@@ -7,8 +7,8 @@ import { sheetHeightPx, THICKNESS_MARKS_NM, thicknessText } from './sheetHeight.
 
 const WIDTH_PX = 980
 const DIAL_X = 46
-const SHEET = { left: 96, width: 400 } as const
-const TEXT_X = 516
+const SHEET = { left: 96, width: 340 } as const
+const TEXT_X = 454
 const TOP_PX = 34
 const PANEL_PX = 56
 
@@ -75,9 +75,9 @@ function panelText({ kind, index, extinction, reflectance, depolarized }: PanelF
 function thicknessLegend(top: number): Content {
   const bars = THICKNESS_MARKS_NM.map((nm, k) => {
     const height = sheetHeightPx(nm)
-    const x = SHEET.left + 84 * k
-    return html`<rect x="${x}" y="${top + 84 - height}" width="26" height="${height}" fill="#d9d9d9"/>
-<text x="${x + 32}" y="${top + 82}" class="note">${thicknessText(nm)}</text>`
+    const x = SHEET.left + 70 * k
+    return html`<rect x="${x}" y="${top + 74 - height}" width="50" height="${height}" fill="#d9d9d9"/>
+<text x="${x + 25}" y="${top + 90}" class="note" text-anchor="middle">${thicknessText(nm)}</text>`
   })
   return html`<g>${bars}
 <text x="${TEXT_X}" y="${top + 46}" class="note">Sheets grow with the logarithm of their thickness.</text>

@@ -47,7 +47,7 @@ export function reviewHtml(review: Review, origin: ReportOrigin, parts: PagePart
 ${verdict(review)}
 </header>
 <main>
-${sections.map(({ title, content }, k) => html`<section><h2><span>${k + 1}</span> ${title}</h2>\n${content}\n</section>\n`)}
+${sections.map(sectionHtml)}
 </main>
 <footer>${originText(origin)}</footer>
 <script type="application/json" id="${DATA_ID}">${pageData(review)}</script>
@@ -58,59 +58,74 @@ ${sections.map(({ title, content }, k) => html`<section><h2><span>${k + 1}</span
   return page.text
 }
 
+function sectionHtml({ title, blocks: [first, ...others] }: Section, k: number): Markup {
+  return html`<section><div class="keep"><h2><span>${k + 1}</span> ${title}</h2>
+${first}</div>
+${others}</section>
+`
+}
+
 interface Section {
   readonly title: string
-  readonly content: Content
+  /** The first stays with the title when the page is printed. */
+  readonly blocks: readonly Content[]
 }
 
 /** Those with something to tell, in the order of a review. */
 function sectionsOf(review: Review, { sheets, pictures }: PageParts): Section[] {
   const { designs, tolerance, comparison } = review
   const [first, last] = [designs[0], designs[designs.length - 1]]
-  const charts = (group: readonly Sheet[], look = '', beside?: Content) =>
-    html`<div class="charts ${look}">${group.map((sheet) => chartFigure(sheet, pictures.get(sheet.name) ?? ''))}${beside}</div>`
+  const row = (group: readonly Sheet[], look = '') =>
+    html`<div class="charts ${look}">${group.map((sheet) => chartFigure(sheet, pictures.get(sheet.name) ?? ''))}</div>\n`
+  const each = (group: readonly Sheet[], look = '') => group.map((sheet) => row([sheet], look))
+  const pairs = (group: readonly Sheet[]) => pairsOf(group).map((pair) => row(pair, 'pairs'))
   const about = designs.length > 1 && html`<p>Of the design after the search.</p>`
   const sections: Section[] = [
-    { title: 'What is asked', content: questionSection(review) },
-    { title: 'The laminate', content: laminateSvg(last.laminate, first === last ? undefined : first.laminate) },
-    { title: 'Figures and limits', content: figuresSection(review) },
-    { title: 'Before and after the search', content: join(searchSection(review), charts(sheets.search)) },
-    { title: 'Reflectance spectrum', content: charts(sheets.spectra) },
-    { title: 'The off-state, seen', content: [swatchesSection(review), charts(sheets.color, 'single')] },
-    { title: 'Viewing cone', content: join(coneSection(review), charts(sheets.cone, 'pairs')) },
-    { title: 'Light budget', content: join(budgetSection(review), [about, charts(sheets.budget)]) },
+    { title: 'What is asked', blocks: [questionSection(review)] },
+    { title: 'The laminate', blocks: [laminateSvg(last.laminate, first === last ? undefined : first.laminate)] },
+    { title: 'Figures and limits', blocks: figuresSection(review) },
+    { title: 'Before and after the search', blocks: [...each(sheets.search), ...searchSection(review)] },
+    { title: 'Reflectance spectrum', blocks: each(sheets.spectra) },
+    { title: 'The off-state, seen', blocks: [swatchesSection(review), ...each(sheets.color, 'single')] },
+    { title: 'Viewing cone', blocks: [...pairs(sheets.cone), ...coneSection(review)] },
+    { title: 'Light budget', blocks: [...withFirst(about, each(sheets.budget)), ...budgetSection(review)] },
     {
       title: 'Itinerary of the light',
-      content: join(itinerarySection(review), [
-        about,
-        charts(sheets.ellipses),
-        charts(sheets.spheres, 'pairs', FIRST_WAY),
-      ]),
-    },
-    {
-      title: 'Production',
-      content: tolerance && [
-        about,
-        charts(sheets.spread, 'pairs'),
-        charts(sheets.sensitivity),
-        toleranceSection(last.stack, tolerance),
+      blocks: [
+        ...withFirst([about, FIRST_WAY], each(sheets.ellipses)),
+        ...pairs(sheets.spheres),
+        ...itinerarySection(review),
       ],
     },
     {
-      title: 'Films compared',
-      content: comparison && [charts(sheets.compare), candidatesSection(first.stack, comparison)],
+      title: 'Production',
+      blocks: tolerance
+        ? [
+            ...withFirst(about, pairs(sheets.spread)),
+            ...each(sheets.sensitivity),
+            ...toleranceSection(last.stack, tolerance),
+          ]
+        : [],
     },
-    { title: 'What this rests on', content: basisSection(review) },
+    {
+      title: 'Films compared',
+      blocks: comparison ? [...each(sheets.compare), ...candidatesSection(first.stack, comparison)] : [],
+    },
+    { title: 'What this rests on', blocks: basisSection(review) },
   ]
-  return sections.filter(({ content }) => content !== undefined)
+  return sections.filter(({ blocks }) => blocks.length > 0)
+}
+
+/** A text that stays with the first block; alone it is none. */
+function withFirst(text: Content, blocks: readonly Content[]): Content[] {
+  return blocks.map((block, k) => (k === 0 ? [text, block] : block))
+}
+
+function pairsOf<Item>(items: readonly Item[]): Item[][] {
+  return items.flatMap((_, k) => (k % 2 === 0 ? [items.slice(k, k + 2)] : []))
 }
 
 const FIRST_WAY = html`<p>The first way of unpolarized light from the room to the panel and back; reflections that join it later are left out.</p>`
-
-/** The pictures before the table; nothing where there is no table. */
-function join(text: Markup | undefined, pictures: Content): Content {
-  return text && [pictures, text]
-}
 
 function originText({ file, sha256, sets, version, date }: ReportOrigin): Markup {
   return html`<p>From <b>${file}</b>, SHA-256 <code>${sha256}</code>${sets.length > 0 && `, with ${sets.map((set) => `--set ${set}`).join(' ')}`}. offblack ${version}, ${date}. Every figure stands with all its digits in the JSON beside this report.</p>`

@@ -48,7 +48,7 @@ td, tbody th { white-space: nowrap; }
 .missed { font-weight: bold; }
 .missed::before { content: "✕ "; }
 .met::before { content: "✓ "; }
-.charts { display: grid; grid-template-columns: minmax(0, 1fr); gap: 26px 20px; margin: 0 0 24px; }
+.charts { display: grid; grid-template-columns: minmax(0, 1fr); gap: 20px; margin: 0 0 26px; }
 .pairs { grid-template-columns: repeat(2, minmax(0, 1fr)); }
 .single { max-width: 640px; }
 .chart { position: relative; margin: 0; }
@@ -82,11 +82,11 @@ code { font: inherit; }
   .verdict { gap: 4mm 9mm; font-size: 8pt; } .verdict b { font-size: 13pt; } .verdict small { font-size: 9pt; }
   .wide { overflow: visible; break-inside: avoid; margin-bottom: 5mm; }
   p { break-inside: avoid; }
-  section > p { break-after: avoid; }
   table { font-size: 8pt; } th, td { padding-right: 4mm; } tr { break-inside: avoid; } caption { break-after: avoid; }
   .note { font-size: 7.5pt; }
   .pairs { grid-template-columns: repeat(2, minmax(0, 1fr)); }
-  .chart, .laminate, .row, .booth { break-inside: avoid; }
+  .keep, .charts, .laminate, .booth { break-inside: avoid; }
+  .charts { margin-bottom: 5mm; }
   .live img { display: block; }
   .live canvas { display: none !important; }
   .booth { font-size: 7.5pt; } .row { flex-wrap: nowrap; } .row > p { flex: 0 0 42mm; } .patch { height: 15mm; } .booth { padding: 4mm 5mm 1mm; } .row { margin-bottom: 3mm; }

@@ -6,22 +6,26 @@ import { ESTIMATE_CAUTION } from '../../evaluateText.js'
 import { type Content, html, type Markup } from '../markup.js'
 
 /** What the figures rest on: assumptions, sources, limits of the model, cautions. */
-export function basisSection(review: Review): Markup {
+export function basisSection(review: Review): Content[] {
   const { laminate } = review.designs[review.designs.length - 1]
-  return html`<h3>Assumptions</h3><ul>${assumptions(review).map(item)}</ul>
-<h3>Sources</h3>
-<ul>${SOURCES.map(item)}
-${laminate.materials.map(({ name, title, source, range_nm: [from, to] }) =>
-  item(`Refractive index of ${name} (${title}), ${given(from)} to ${given(to)} nm: ${source}`),
-)}
-${item('All other figures of films, panel and emission: the stack file; their origin is for its author to state.')}</ul>
-<h3>Limits of the model</h3><ul>${MODEL_LIMITS.map(item)}</ul>
-<h3>Cautions</h3><ul>${CAUTIONS.map(item)}</ul>`
+  const indices = laminate.materials.map(
+    ({ name, title, source, range_nm: [from, to] }) =>
+      `Refractive index of ${name} (${title}), ${given(from)} to ${given(to)} nm: ${source}`,
+  )
+  return [
+    list('Assumptions', assumptions(review)),
+    list('Sources', [...SOURCES, ...indices, FROM_THE_FILE]),
+    list('Limits of the model', MODEL_LIMITS),
+    list('Cautions', CAUTIONS),
+  ]
 }
 
-function item(text: Content): Markup {
-  return html`<li>${text}</li>\n`
+function list(title: string, items: readonly string[]): Markup {
+  return html`<div class="keep"><h3>${title}</h3><ul>${items.map((item) => html`<li>${item}</li>\n`)}</ul></div>`
 }
+
+const FROM_THE_FILE =
+  'All other figures of films, panel and emission: the stack file; their origin is for its author to state.'
 
 function assumptions({ designs }: Review): string[] {
   const { stack, laminate } = designs[designs.length - 1]

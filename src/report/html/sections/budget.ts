@@ -2,16 +2,18 @@ import type { Budget } from '../../../studies/budget.js'
 import { BUDGET_MEANING } from '../../../studies/budget.js'
 import type { Review } from '../../../studies/review.js'
 import { given } from '../../decimals.js'
-import { html, type Markup } from '../markup.js'
+import { type Content, html, type Markup } from '../markup.js'
 import { metricFigure, numbers, table, words } from '../table.js'
 
 /** Where the remaining reflection comes from, from each direction looked at. */
-export function budgetSection({ budgets = [] }: Review): Markup | undefined {
-  if (budgets.length === 0) return undefined
+export function budgetSection({ budgets = [] }: Review): Content[] {
+  if (budgets.length === 0) return []
   const notes = new Set(budgets.flatMap((entry) => entry.notes))
-  return html`${budgets.map(budgetTable)}
-<p class="note">${BUDGET_MEANING}</p>
-${[...notes].map((note) => html`<p class="note">Left out: ${note}.</p>`)}`
+  return [
+    ...budgets.map(budgetTable),
+    html`<p class="note">${BUDGET_MEANING}</p>`,
+    ...[...notes].map((note) => html`<p class="note">Left out: ${note}.</p>`),
+  ]
 }
 
 function budgetTable({ theta_deg, phi_deg, total, ideal, terms, rest }: Budget): Markup {

@@ -1,13 +1,13 @@
 import type { Review } from '../../../studies/review.js'
 import { fixed, given } from '../../decimals.js'
-import type { Markup } from '../markup.js'
+import type { Content } from '../markup.js'
 import { figure, metricFigure, numbers, table, words } from '../table.js'
 import { DESIGN_NAMES } from './figures.js'
 
 /** What the viewing cone comes down to. */
-export function coneSection({ designs }: Review): Markup | undefined {
+export function coneSection({ designs }: Review): Content[] {
   const seen = designs.flatMap(({ name, cone }) => (cone === undefined ? [] : [{ name, cone }]))
-  if (seen.length === 0) return undefined
+  if (seen.length === 0) return []
   const summaries = seen.map(({ cone }) => cone.summary)
   const { limit } = summaries[0]
   const share = (value: number | undefined) => (value === undefined ? '–' : figure(value, fixed(100 * value, 1)))
@@ -36,9 +36,11 @@ export function coneSection({ designs }: Review): Markup | undefined {
         ]),
   ]
   const { theta_deg } = seen[0].cone
-  return table(
-    `Viewing cone up to θ ${given(theta_deg[theta_deg.length - 1])}°`,
-    [words(''), ...seen.map(({ name }) => numbers(seen.length > 1 ? DESIGN_NAMES[name] : 'value'))],
-    rows,
-  )
+  return [
+    table(
+      `Viewing cone up to θ ${given(theta_deg[theta_deg.length - 1])}°`,
+      [words(''), ...seen.map(({ name }) => numbers(seen.length > 1 ? DESIGN_NAMES[name] : 'value'))],
+      rows,
+    ),
+  ]
 }

@@ -9,14 +9,14 @@ import { type Content, html, type Markup } from '../markup.js'
 import { metricFigure, metricHeading, numbers, type TableColumn, table, words } from '../table.js'
 
 /** The file's limits, met or missed and by how much; then the figures from every direction. */
-export function figuresSection({ designs }: Review): Markup {
+export function figuresSection({ designs }: Review): Content[] {
   const { evaluation } = designs[0]
-  return html`${
+  return [
     evaluation.limits.length > 0
       ? limitsTable(designs)
-      : html`<p>The file sets no limits; the figures stand for themselves.</p>`
-  }
-${designs.map((design) => directionsTable(design, designs.length > 1))}`
+      : html`<p>The file sets no limits; the figures stand for themselves.</p>`,
+    ...designs.map((design) => directionsTable(design, designs.length > 1)),
+  ]
 }
 
 function limitsTable(designs: readonly ReviewedDesign[]): Markup {
@@ -35,9 +35,10 @@ function limitsTable(designs: readonly ReviewedDesign[]): Markup {
   return table('Limits', columns, rows)
 }
 
+/** As the charts name them; the search lies between. */
 export const DESIGN_NAMES: Readonly<Record<ReviewedDesign['name'], string>> = {
-  file: 'as in the file',
-  search: 'after the search',
+  file: 'before',
+  search: 'after',
 }
 
 function limitCells(limit: LimitEvaluation): Content[] {
@@ -56,7 +57,7 @@ function directionsTable({ name, evaluation: { directions } }: ReviewedDesign, s
     const heading = label === undefined ? metricHeading(metric) : `– ${label.trim()}${unit === '' ? '' : ` (${unit})`}`
     return [[heading, ...directions.map((direction) => metricFigure(metric, of(direction)))]]
   })
-  const caption = several ? `Figures ${DESIGN_NAMES[name]}` : 'Figures'
+  const caption = several ? `Figures ${DESIGN_NAMES[name]} the search` : 'Figures'
   return table(caption, columns, [...rows, ...contrastRows(directions)])
 }
 

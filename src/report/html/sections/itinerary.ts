@@ -1,27 +1,29 @@
 import type { Pass } from '../../../studies/itinerary.js'
 import type { Review } from '../../../studies/review.js'
 import { fixed, given } from '../../decimals.js'
-import type { Markup } from '../markup.js'
+import type { Content } from '../markup.js'
 import { figure, numbers, table, words } from '../table.js'
 
 const SHOWN_NM = 550
 
 /** The states the pictures show, at 550 nm. */
-export function itinerarySection({ itinerary }: Review): Markup | undefined {
-  if (itinerary === undefined) return undefined
+export function itinerarySection({ itinerary }: Review): Content[] {
+  if (itinerary === undefined) return []
   const rows = itinerary.passes.filter(({ wavelength_nm }) => wavelength_nm === SHOWN_NM).map(passRow)
-  return table(
-    `State after each layer, ${SHOWN_NM} nm, θ ${given(itinerary.theta_deg)}° φ ${given(itinerary.phi_deg)}°`,
-    [
-      words('layer'),
-      words(''),
-      numbers('flux (%)'),
-      numbers('azimuth (°)'),
-      numbers('ellipticity (°)'),
-      numbers('polarized (%)'),
-    ],
-    rows,
-  )
+  return [
+    table(
+      `State after each layer, ${SHOWN_NM} nm, θ ${given(itinerary.theta_deg)}° φ ${given(itinerary.phi_deg)}°`,
+      [
+        words('layer'),
+        words(''),
+        numbers('flux (%)'),
+        numbers('azimuth (°)'),
+        numbers('ellipticity (°)'),
+        numbers('polarized (%)'),
+      ],
+      rows,
+    ),
+  ]
 }
 
 function passRow({ layer, direction, stokes, azimuth_deg, ellipticity_deg, degree_of_polarization }: Pass) {

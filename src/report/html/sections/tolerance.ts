@@ -9,16 +9,21 @@ import { type Content, html, type Markup } from '../markup.js'
 import { figure, numbers, table, words } from '../table.js'
 
 /** How much of production passes, how the metrics spread, what moves them and what to tighten. */
-export function toleranceSection(stack: Stack, tolerance: Tolerance): Markup {
-  return html`${yieldTables(tolerance)}
-${spreadTable(tolerance)}
-${sensitivityTable(tolerance)}
-${tolerance.tightening && tighteningTable(stack, tolerance.tightening)}
-<p class="note">${tolerance.draws} draws of the tolerances (${tolerance.sampling.replaceAll('_', ' ')}, seed ${tolerance.seed}); intervals of 95 %, for a yield after Clopper and Pearson.</p>
-${Object.entries(tolerance.held).map(([path, held]) => html`<p class="note">${path} was drawn beyond what is physical in ${share(held)} % of the draws and set to its edge there.</p>`)}`
+export function toleranceSection(stack: Stack, tolerance: Tolerance): Content[] {
+  return [
+    yieldTable(tolerance),
+    spreadTable(tolerance),
+    sensitivityTable(tolerance),
+    tolerance.tightening && tighteningTable(stack, tolerance.tightening),
+    html`<p class="note">${tolerance.draws} draws of the tolerances (${tolerance.sampling.replaceAll('_', ' ')}, seed ${tolerance.seed}); intervals of 95 %, for a yield after Clopper and Pearson.</p>`,
+    ...Object.entries(tolerance.held).map(
+      ([path, held]) =>
+        html`<p class="note">${path} was drawn beyond what is physical in ${share(held)} % of the draws and set to its edge there.</p>`,
+    ),
+  ]
 }
 
-function yieldTables({ yield: all, yield_interval, limits }: Tolerance): Content {
+function yieldTable({ yield: all, yield_interval, limits }: Tolerance): Content {
   if (all === undefined || yield_interval === undefined || limits === undefined) return undefined
   const rows = limits.map((limit) => [...limitCells(limit), share(limit.yield), interval(limit.yield_interval)])
   return table(

@@ -42,10 +42,16 @@ export function designProblem(
   return {
     variables: designVariables(stack, question),
     ...functionsAt(stack, question, wavelengths),
-    // Which starts are worth a polish is told by the design as it is drawn, whatever production makes of it.
+    // Which starts are worth a polish, and their basins, are told by the design as it is drawn; what production makes of it
+    // decides among the basins and the rest.
     screen: whenAsked(() => meanOverViews(stack, Object.keys(question.vary), question.minimize, coarse)),
-    rough: functionsAt(stack, question, coarse),
+    rough: functionsAt(stack, asDrawn(question), coarse),
   }
+}
+
+/** The same question without tolerances. */
+function asDrawn({ minimize: { quantile: _, ...minimize }, ...rest }: OptimizeQuestion): OptimizeQuestion {
+  return { ...rest, minimize }
 }
 
 /** Objective, gradient and constraints on these wavelengths, each made ready when first asked for. */

@@ -17,12 +17,16 @@ export function retardanceFault({ retardance, dispersion, thickness, rth, nz }: 
     }
   }
   const re = retardanceAt550({ retardance })
-  if (typeof retardance !== 'number' && re === 0) {
-    const next = 'give the number 0, with rth for a C-plate'
-    return { code: 'out_of_range', message: 'the table is zero at 550 nm', received: '0', next }
+  if (typeof retardance !== 'number' && re === 0) return zeroAt550('give the number 0, with rth for a C-plate')
+  if (dispersion !== undefined && 'value' in dispersion && retardanceAt550({ retardance: dispersion }) === 0) {
+    return zeroAt550('a dispersion is relative to 550 nm: give a table that is not zero there')
   }
   const out = rthAt550({ retardance: re, rth, nz }) + re / 2
   return birefringenceFault(Math.max(Math.abs(re), Math.abs(out)), thickness)
+}
+
+function zeroAt550(next: string): Fault {
+  return { code: 'out_of_range', message: 'the table is zero at 550 nm', received: '0', next }
 }
 
 /** No transparent film has a birefringence of 1: the thickness or its unit is wrong. */

@@ -59,7 +59,7 @@ describe('an option sets', () => {
   })
 
   it('a number in place of a measured retardance, which leaves its dispersion', async () => {
-    const text = TEXT.replace('272 nm', '{wavelength_nm: [450, 550], value: [290, 272]}')
+    const text = TEXT.replace('272 nm', '{wavelength_nm: [450, 550], value: [290 nm, 272 nm]}')
     expect((await stackOf(text, { sets: ['half.retardance=280 nm'] })).layers[2]).toMatchObject({
       retardance: 280,
       dispersion: { value: [290, 272] },

@@ -1,6 +1,6 @@
 import * as z from 'zod'
 import type { TableFiles } from '../tableFiles.js'
-import { filmFields } from './layer.js'
+import { filmFields } from './filmFields.js'
 import { indexSchema } from './refractiveIndex.js'
 import { requires } from './requires.js'
 

@@ -4,10 +4,10 @@ import { FIELD_LIMITS } from '../fieldLimits.js'
 import { retardanceFault, withScalarRetardance } from '../measuredRetardance.js'
 import type { Layer } from '../stack.js'
 import type { TableFiles } from '../tableFiles.js'
-import { numberSchema, quantitySchema, report } from './quantity.js'
-import { DEFAULT_INDEX, type indexSchema } from './refractiveIndex.js'
+import { filmFields } from './filmFields.js'
+import { quantitySchema, report } from './quantity.js'
+import type { indexSchema } from './refractiveIndex.js'
 import { requires } from './requires.js'
-import { fileTable, inlineTable, spectrumSchema } from './spectrum.js'
 
 /** Layers thinner than this are coherent unless the file says otherwise, nm. */
 const THICK_FROM_NM = 5000
@@ -69,11 +69,6 @@ function idFault(id: string): Fault | undefined {
   }
 }
 
-const thickness = quantitySchema(FIELD_LIMITS.thickness, 'Physical thickness.', '25 um')
-const coherent = z
-  .boolean()
-  .optional()
-  .meta({ description: 'Joined by amplitudes (true) or by intensities (false). Unless given: thickness below 5 um.' })
 const film = z
   .string()
   .optional()
@@ -83,85 +78,6 @@ const film = z
   })
 
 const angle = (description: string) => quantitySchema(FIELD_LIMITS.azimuth, description, '45 deg').prefault('0 deg')
-
-/** What a film itself has, by kind: the fields a film card may hold. */
-export function filmFields(files: TableFiles, index: ReturnType<typeof indexSchema>) {
-  const transmittance = (name: 'single_transmittance' | 'transmission_axis_transmittance', text: string, say: string) =>
-    spectrumSchema(FIELD_LIMITS[name], files, text, [say]).optional()
-  const crossed = (name: 'k2' | 'absorption_axis_transmittance', text: string) =>
-    spectrumSchema(FIELD_LIMITS[name], files, text, ['0.02 %']).optional()
-  return {
-    isotropic: { thickness, coherent, index: index('Refractive index.') },
-    retarder: {
-      thickness,
-      coherent,
-      index: index('Mean of the three principal indices.').prefault(DEFAULT_INDEX.retarder),
-      retardance: spectrumSchema(
-        FIELD_LIMITS.retardance,
-        files,
-        '(nx - ny) d at 550 nm with x the slow axis; a table gives its own dispersion.',
-        ['138 nm', '137 nm', '136 nm'],
-      ),
-      nz: numberSchema(FIELD_LIMITS.nz, '(nx - nz)/(nx - ny). Unless nz or rth is given: 1.', 1).optional(),
-      rth: quantitySchema(FIELD_LIMITS.rth, '((nx + ny)/2 - nz) d at 550 nm, in place of nz.', '69 nm').optional(),
-      dispersion: dispersionSchema(files).optional(),
-    },
-    polarizer: {
-      thickness,
-      coherent,
-      index: index('Refractive index of the host; its absorption comes from the transmittances.').prefault(
-        DEFAULT_INDEX.polarizer,
-      ),
-      single_transmittance: transmittance(
-        'single_transmittance',
-        'In air, unpolarized light, faces included.',
-        '43.2 %',
-      ),
-      polarization_efficiency: transmittance('single_transmittance', '(K1 - K2)/(K1 + K2), in air.', '99.98 %'),
-      k1: transmittance('single_transmittance', 'Along the transmission axis, in air, faces included.', '86 %'),
-      k2: crossed('k2', 'Along the absorption axis, in air, faces included.'),
-      transmission_axis_transmittance: transmittance(
-        'transmission_axis_transmittance',
-        'Internal, one pass, along the transmission axis.',
-        '93 %',
-      ),
-      absorption_axis_transmittance: crossed(
-        'absorption_axis_transmittance',
-        'Internal, one pass, along the absorption axis.',
-      ),
-    },
-    crystal: {
-      thickness,
-      coherent,
-      indices: z
-        .tuple([index('Along the first axis.'), index('Along the second axis.'), index('Along the third axis.')])
-        .meta({ description: 'The three principal indices.', examples: [[1.65, 1.52, 1.58]] }),
-      tilt: quantitySchema(
-        FIELD_LIMITS.tilt,
-        'First axis out of the film plane, towards the viewer.',
-        '30 deg',
-      ).prefault('0 deg'),
-    },
-  }
-}
-
-const RATIOS = z
-  .strictObject({
-    re450: numberSchema(FIELD_LIMITS.re450, 'Re(450 nm)/Re(550 nm).', 0.85),
-    re650: numberSchema(FIELD_LIMITS.re650, 'Re(650 nm)/Re(550 nm).', 1.05),
-  })
-  .meta({ title: 'Trade ratios', examples: [{ re450: 0.85, re650: 1.05 }] })
-
-/** Any scale will do for a table: it is divided by its value at 550 nm. */
-const TABLE_LIMITS = { quantity: 'number', min: -1e6, max: 1e6 } as const
-
-function dispersionSchema(files: TableFiles) {
-  return z
-    .union([RATIOS, inlineTable(TABLE_LIMITS, ['1.06', '1', '0.98']), fileTable(TABLE_LIMITS, files)], {
-      error: () => '{re450, re650}, {wavelength_nm: […], value: […]} or {file: x.csv}',
-    })
-    .meta({ description: 'How retardance goes with wavelength; absent: flat.' })
-}
 
 /** The four kinds of layer. */
 export function layerSchema(files: TableFiles, index: ReturnType<typeof indexSchema>) {

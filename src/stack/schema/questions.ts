@@ -45,7 +45,7 @@ export const optimizeSchema = z
   .transform(({ vary, minimize, maximize, subject_to }, context): OptimizeQuestion => {
     const aim = minimize ?? maximize
     if (aim === undefined || (minimize !== undefined && maximize !== undefined)) {
-      report(context, aimFault(aim === undefined ? 'neither' : 'both'))
+      report(context, aimFault(aim === undefined ? 'neither' : 'both'), aim === undefined ? [] : ['maximize'])
       return z.NEVER
     }
     const { under: _, ...rest } = aim

@@ -84,9 +84,18 @@ export const spreadsSchema = pathRecord(spread, readSpread).meta({
 /** Reads one value of a record, telling faults by their place within it. */
 type Reader<Raw, Value> = (raw: Raw, limits: Limits, tell: (fault: Fault, at: PathKey[]) => void) => Value
 
+const NOTHING_VARIES: Fault = {
+  code: 'out_of_range',
+  message: 'nothing is varied',
+  received: 'no path',
+  allowed: 'at least one parameter path',
+  next: 'name one, such as quarter.slow_axis, or leave the section out',
+}
+
 /** A record by parameter path. Paths that name no field are left out here; the sense check tells them. */
 function pathRecord<Schema extends z.ZodType, Value>(schema: Schema, read: Reader<z.output<Schema>, Value>) {
   return z.record(z.string(), schema).transform((record, context): Readonly<Record<string, Value>> => {
+    if (Object.keys(record).length === 0) report(context, NOTHING_VARIES)
     const entries = Object.entries(record).flatMap(([path, value]): [string, Value][] => {
       const limits = limitsOfPath(path)
       if (limits === undefined) return []

@@ -3,6 +3,13 @@ import { useEffect, useRef } from 'preact/hooks'
 
 Chart.register(...registerables)
 
+const configs = new WeakMap<HTMLCanvasElement, ChartConfiguration>()
+
+/** What a canvas of the page shows at the moment. */
+export function configOf(canvas: HTMLCanvasElement): ChartConfiguration | undefined {
+  return configs.get(canvas)
+}
+
 interface ChartViewProps {
   readonly name: string
   readonly config: ChartConfiguration
@@ -18,6 +25,7 @@ export function ChartView({ name, config, label, heightPx }: ChartViewProps) {
   useEffect(() => {
     if (chart.current !== undefined) update(chart.current, config)
     else if (canvas.current !== null) chart.current = new Chart(canvas.current, responsive(config))
+    if (canvas.current !== null) configs.set(canvas.current, config)
   }, [config])
   useEffect(() => () => chart.current?.destroy(), [])
   return (

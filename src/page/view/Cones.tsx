@@ -39,7 +39,7 @@ export function Cones({ cones, theme }: ConesProps) {
             name={k === configs.length - 1 ? 'cone' : 'cone-before'}
             config={config}
             label={`Viewing cone to ${cones[k].cone.theta_deg.at(-1)}°, ${METRIC_QUANTITIES[metric].label}, ${cones[k].name}`}
-            heightPx={330}
+            heightPx={310}
           />
         ))}
       </div>

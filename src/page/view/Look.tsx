@@ -48,7 +48,7 @@ export function Look({ stack, shown, place, onPlace, theme }: LookProps) {
           name="spectrum"
           config={spectrum}
           label={`Reflectance against wavelength, ${directionText(directions[place])}; ${METRIC_QUANTITIES.luminous_reflectance.label} ${luminous}`}
-          heightPx={300}
+          heightPx={290}
         />
       </div>
       {cones.length > 0 && <Cones cones={cones} theme={theme} />}

@@ -1,5 +1,6 @@
 import { METRIC_QUANTITIES } from '../charts/quantity.js'
-import type { Cone, ConeSummary } from '../studies/cone.js'
+import type { Cone } from '../studies/cone.js'
+import type { ConeSummary } from '../studies/coneSummary.js'
 import { fixed, given } from './decimals.js'
 import { ESTIMATE_CAUTION } from './evaluateText.js'
 import { metricNumber, metricWithUnit } from './metricNumber.js'

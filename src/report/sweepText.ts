@@ -15,12 +15,16 @@ const MOST_COLUMNS = 14
 export function sweepText(sweep: Sweep, paint: Paint = PLAIN): string {
   const parts = [
     `${paint.strong(sweep.title)}\n${questionText(sweep)}`,
-    ...tables(sweep),
-    extremesText(sweep),
+    ...(isEmpty(sweep) ? [] : [...tables(sweep), extremesText(sweep)]),
     ...(sweep.interrupted ? [paint.bad('interrupted: the last points are missing')] : []),
     paint.faint(ESTIMATE_CAUTION),
   ]
   return `${parts.join('\n\n')}\n`
+}
+
+/** Stopped before the first point. */
+function isEmpty({ metrics }: Sweep): boolean {
+  return Object.values(metrics).every((values) => values.length === 0)
 }
 
 function questionText({ axes, theta_deg, phi_deg }: Sweep): string {

@@ -30,7 +30,7 @@ export interface Budget {
   readonly notes: readonly string[]
 }
 
-export interface BudgetTerm {
+interface BudgetTerm {
   readonly name: Imperfection
   /** Added to the ideal stack, which has none of the others. */
   readonly alone: number

@@ -2,8 +2,8 @@
 import { Scene } from '../appearance/scene.js'
 import { ciede2000 } from '../color/ciede2000.js'
 import { chroma } from '../color/cielab.js'
-import { gaussLegendre } from '../numeric/gaussLegendre.js'
 import type { Stack } from '../stack/stack.js'
+import { type ConeSummary, summarizeCone } from './coneSummary.js'
 import { degrees } from './evaluate.js'
 import type { Hooks } from './hooks.js'
 import { leadingResults, mapInline, type ParallelMap, type Task } from './parallel.js'
@@ -19,14 +19,20 @@ export interface ConeQuestion {
   readonly limit?: number
 }
 
-/** Degrees and fractions; tables are [θ][φ]. */
-export interface Cone {
+/** Degrees and fractions. */
+export interface Cone extends ConeTables {
   readonly title: string
   readonly theta_deg: readonly number[]
   readonly phi_deg: readonly number[]
+  readonly summary: ConeSummary
+  readonly interrupted: boolean
+}
+
+/** Each [θ][φ]. */
+interface ConeTables {
   readonly luminous_reflectance: readonly (readonly number[])[]
   readonly chroma: readonly (readonly number[])[]
-  readonly lab: readonly (readonly (readonly number[])[])[]
+  readonly lab: readonly (readonly Lab[])[]
   /** CIEDE2000 from the head-on color. */
   readonly delta_e00: readonly (readonly number[])[]
   readonly emission_transmittance?: readonly (readonly number[])[]
@@ -34,22 +40,9 @@ export interface Cone {
     readonly illuminance_lx: number
     readonly ratio: readonly (readonly number[])[]
   }[]
-  readonly summary: ConeSummary
-  readonly interrupted: boolean
 }
 
-export interface ConeSummary {
-  readonly worst: { readonly theta_deg: number; readonly phi_deg: number; readonly luminous_reflectance: number }
-  readonly limit?: number
-  /** Share of the cone's solid angle within the limit. */
-  readonly share_within_limit?: number
-  /** Largest θ up to which every azimuth meets the limit; absent where even head-on does not. */
-  readonly theta_within_limit_deg?: number
-  /** Luminous reflectance under uniform diffuse light: ∫ R cos θ dΩ / π over the hemisphere. */
-  readonly diffuse_reflectance: number
-  /** Whether half the azimuths were computed and the others taken from the half-turn symmetry. */
-  readonly half_turn_symmetry: boolean
-}
+type Lab = readonly [number, number, number]
 
 interface Shared {
   readonly stack: Stack
@@ -58,7 +51,7 @@ interface Shared {
 
 interface Row {
   readonly luminous: number[]
-  readonly lab: number[][]
+  readonly lab: Lab[]
   readonly emission: number[]
   readonly contrast: number[][]
 }
@@ -74,7 +67,7 @@ export const coneRow: Task<Shared, number, Row> = {
       for (const phi of phis) {
         const look = scene.lookOnce(stack, theta, phi)
         row.luminous.push(look.luminousReflectance)
-        row.lab.push([...look.lab])
+        row.lab.push(look.lab)
         if (look.luminousEmissionTransmittance === undefined) continue
         row.emission.push(look.luminousEmissionTransmittance)
         if (stack.emission.luminance > 0) {
@@ -96,33 +89,39 @@ export async function cone(
   const phis = divided(2 * Math.PI, question.phiStep)
   const half = phis.length % 2 === 0 && hasHalfTurnSymmetry(stack, question.thetaMax)
   const computed = half ? phis.slice(0, phis.length / 2) : phis
-  const rows = await map(coneRow, { stack, phis: computed }, thetas, hooks)
-  const done = leadingResults(rows)
-  const whole = <T>(values: readonly T[]): T[] => (half ? [...values, ...values] : [...values])
-  const luminous = done.map((row) => whole(row.luminous))
-  const lab = done.map((row) => whole(row.lab))
-  const headOn = lab[0]?.[0] ?? [0, 0, 0]
-  const emits = done[0] !== undefined && done[0].emission.length > 0
-  const contrasts = done[0] !== undefined && done[0].contrast.length > 0
+  const shared = { stack, phis: computed }
+  const rings = leadingResults(await map(coneRow, shared, thetas, hooks))
+  // Head-on there is always something to tell, however early the study was stopped.
+  const done = rings.length > 0 ? rings : leadingResults(await mapInline(coneRow, shared, thetas.slice(0, 1)))
+  const tables = tablesOf(stack, done, half ? 2 : 1)
+  const summary = summarizeCone(stack, { thetas, phis, luminous: tables.luminous_reflectance }, question.limit)
   return {
     title: stack.title,
     theta_deg: thetas.slice(0, done.length).map(degrees),
     phi_deg: phis.map(degrees),
-    luminous_reflectance: luminous,
-    chroma: lab.map((row) => row.map((color) => chroma(color as [number, number, number]))),
+    ...tables,
+    summary: { ...summary, half_turn_symmetry: half },
+    interrupted: done.length < thetas.length,
+  }
+}
+
+/** The metrics as [θ][φ]; each row stands for `turns` equal parts of the circle. */
+function tablesOf({ ambient }: Stack, rows: readonly Row[], turns: 1 | 2): ConeTables {
+  const whole = <T>(values: readonly T[]): T[] => (turns === 2 ? [...values, ...values] : [...values])
+  const lab = rows.map((row) => whole(row.lab))
+  const headOn = lab[0]?.[0] ?? [0, 0, 0]
+  return {
+    luminous_reflectance: rows.map((row) => whole(row.luminous)),
+    chroma: lab.map((row) => row.map(chroma)),
     lab,
-    delta_e00: lab.map((row) =>
-      row.map((color) => ciede2000(headOn as [number, number, number], color as [number, number, number])),
-    ),
-    ...(emits && { emission_transmittance: done.map((row) => whole(row.emission)) }),
-    ...(contrasts && {
-      ambient_contrast: stack.ambient.map((illuminance_lx, level) => ({
+    delta_e00: lab.map((row) => row.map((color) => ciede2000(headOn, color))),
+    ...(rows[0]?.emission.length > 0 && { emission_transmittance: rows.map((row) => whole(row.emission)) }),
+    ...(rows[0]?.contrast.length > 0 && {
+      ambient_contrast: ambient.map((illuminance_lx, level) => ({
         illuminance_lx,
-        ratio: done.map((row) => whole(row.contrast.map((ratios) => ratios[level]))),
+        ratio: rows.map((row) => whole(row.contrast.map((ratios) => ratios[level]))),
       })),
     }),
-    summary: summarize(stack, question, thetas, phis, luminous, half),
-    interrupted: done.length < thetas.length,
   }
 }
 
@@ -149,71 +148,4 @@ function hasHalfTurnSymmetry(stack: Stack, theta: number): boolean {
       Math.abs((there.luminousEmissionTransmittance ?? 0) - emission) < 1e-10
     )
   })
-}
-
-function summarize(
-  stack: Stack,
-  question: ConeQuestion,
-  thetas: readonly number[],
-  phis: readonly number[],
-  luminous: readonly (readonly number[])[],
-  half: boolean,
-): ConeSummary {
-  let worst = { theta_deg: 0, phi_deg: 0, luminous_reflectance: Number.NEGATIVE_INFINITY }
-  luminous.forEach((row, t) => {
-    row.forEach((value, p) => {
-      if (value <= worst.luminous_reflectance) return
-      worst = { theta_deg: degrees(thetas[t]), phi_deg: degrees(phis[p]), luminous_reflectance: value }
-    })
-  })
-  const limit =
-    question.limit ?? stack.limits.find((l) => l.metric === 'luminous_reflectance' && l.max !== undefined)?.max
-  return {
-    worst,
-    ...(limit !== undefined && { limit, ...withinLimit(thetas, luminous, limit) }),
-    diffuse_reflectance: diffuseReflectance(stack),
-    half_turn_symmetry: half,
-  }
-}
-
-function withinLimit(thetas: readonly number[], luminous: readonly (readonly number[])[], limit: number) {
-  const step = thetas.length > 1 ? thetas[1] - thetas[0] : 0
-  let solidAngle = 0
-  let within = 0
-  let largest: number | undefined
-  let unbroken = true
-  luminous.forEach((row, t) => {
-    // The ring of directions nearest to this θ.
-    const low = Math.max(0, thetas[t] - step / 2)
-    const high = Math.min(thetas[thetas.length - 1], thetas[t] + step / 2)
-    const ring = (Math.cos(low) - Math.cos(high)) / row.length
-    const good = row.filter((value) => value <= limit).length
-    solidAngle += ring * row.length
-    within += ring * good
-    unbroken = unbroken && good === row.length
-    if (unbroken) largest = degrees(thetas[t])
-  })
-  return {
-    share_within_limit: solidAngle > 0 ? within / solidAngle : Number(luminous[0]?.[0] <= limit),
-    ...(largest !== undefined && { theta_within_limit_deg: largest }),
-  }
-}
-
-/** Quadrature of the diffuse average: Gauss–Legendre in cos θ (where R is smooth up to grazing), equal steps in φ. */
-const DIFFUSE_POLAR = 16
-const DIFFUSE_AZIMUTHS = 12
-
-/** 2 ∫ R(θ) cos θ d(cos θ), averaged over azimuth. */
-export function diffuseReflectance(stack: Stack): number {
-  const scene = new Scene(stack)
-  const { nodes, weights } = gaussLegendre(DIFFUSE_POLAR)
-  let sum = 0
-  nodes.forEach((cos, k) => {
-    for (let m = 0; m < DIFFUSE_AZIMUTHS; m++) {
-      // By reciprocity half a turn tells all.
-      const look = scene.lookOnce(stack, Math.acos(cos), (Math.PI * m) / DIFFUSE_AZIMUTHS)
-      sum += (2 * cos * weights[k] * look.luminousReflectance) / DIFFUSE_AZIMUTHS
-    }
-  })
-  return sum
 }

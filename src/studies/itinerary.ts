@@ -42,7 +42,7 @@ export interface Pass {
   readonly within?: readonly Stokes[]
 }
 
-export type Stokes = readonly [number, number, number, number]
+type Stokes = readonly [number, number, number, number]
 
 export function itinerary(stack: Stack, { wavelengthsNm, theta, phi }: ItineraryQuestion): Itinerary {
   return {

@@ -68,28 +68,35 @@ export const sweepBlock: Task<Shared, { from: number; to: number }, number[]> = 
     const parameterAxes = axes.filter((axis) => !DIRECTION_AXES.includes(axis.path))
     const paths = [...parameterAxes.map((axis) => axis.path), ...links.map((link) => link.path)]
     const withParameters = compileParameters(stack, paths)
+    const stackAt = (at: Place): Stack => {
+      const plain = plainValues(axes, at)
+      const linked = links.map((link) => fromPlain(formulaAt(link.expression, plain, variables), link.kind))
+      return withParameters([...parameterAxes.map((axis) => at[axis.path]), ...linked])
+    }
     return ({ from, to }) => {
       const out: number[] = []
       let scene = new Scene(stack)
       for (let point = from; point < to; point++) {
         const at = gridPoint(axes, point)
-        const linked = links.map((link) =>
-          fromPlain(formulaAt(link.expression, plainValues(axes, at), variables), link.kind),
-        )
-        const changed = withParameters([...parameterAxes.map((axis) => at[axis.path]), ...linked])
         if (at.wavelength !== undefined) scene = new Scene(stack, band(at.wavelength, question.bandNm))
-        for (const request of question.requests) {
-          const theta = at.theta ?? request.theta
-          const phi = at.phi ?? request.phi
-          const look = DIRECTION_AXES.some((name) => at[name] !== undefined)
-            ? scene.lookOnce(changed, theta, phi)
-            : scene.look(changed, theta, phi)
-          out.push(metricValue(scene, changed, look, { ...request, theta, phi }))
-        }
+        out.push(...metricsAt(scene, stackAt(at), at, question.requests))
       }
       return out
     }
   },
+}
+
+/** Where on the axes, by their paths: nm, rad, fractions. */
+type Place = Readonly<Record<string, number>>
+
+function metricsAt(scene: Scene, stack: Stack, at: Place, requests: readonly MetricRequest[]): number[] {
+  // Directions that do not come again keep no solver.
+  const moving = DIRECTION_AXES.some((name) => at[name] !== undefined)
+  return requests.map((request) => {
+    const { theta, phi } = { ...request, ...at }
+    const look = moving ? scene.lookOnce(stack, theta, phi) : scene.look(stack, theta, phi)
+    return metricValue(scene, stack, look, { ...request, theta, phi })
+  })
 }
 
 /** Points handed out at once. */
@@ -133,7 +140,7 @@ function sharedDirection({ axes, requests }: SweepQuestion): Pick<Sweep, 'theta_
   }
 }
 
-function gridPoint(axes: readonly SweepAxis[], point: number): Record<string, number> {
+function gridPoint(axes: readonly SweepAxis[], point: number): Place {
   const at: Record<string, number> = {}
   let rest = point
   for (const { path, values } of [...axes].reverse()) {
@@ -143,7 +150,7 @@ function gridPoint(axes: readonly SweepAxis[], point: number): Record<string, nu
   return at
 }
 
-function plainValues(axes: readonly SweepAxis[], at: Readonly<Record<string, number>>): Record<string, number> {
+function plainValues(axes: readonly SweepAxis[], at: Place): Record<string, number> {
   return Object.fromEntries(axes.map(({ path, kind }) => [path, toPlain(at[path], kind)]))
 }
 

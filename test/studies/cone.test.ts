@@ -168,4 +168,11 @@ describe('stopped half way', () => {
     expect(found.theta_deg).toEqual([0, 15])
     expect(found.luminous_reflectance).toHaveLength(2)
   })
+
+  it('looks head-on at least', async () => {
+    const found = await cone(LAMINATE, QUESTION, { stopped: () => true })
+    expect(found.interrupted).toBe(true)
+    expect(found.theta_deg).toEqual([0])
+    expect(found.summary.worst.luminous_reflectance).toBe(found.luminous_reflectance[0][0])
+  })
 })

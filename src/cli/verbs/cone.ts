@@ -32,7 +32,8 @@ export async function run(context: Context<ConeOptions>): Promise<ExitCode> {
       new Map<string, string | Uint8Array>([
         [`${stem}.cone.json`, jsonText(found)],
         [`${stem}.cone.csv`, coneCsv(found)],
-        ...(await chartFiles(stem, coneSheets([{ name: '', cone: found }]))),
+        // A single ring is no map.
+        ...(await chartFiles(stem, found.theta_deg.length > 1 ? coneSheets([{ name: '', cone: found }]) : [])),
       ]),
   )
   return found.interrupted ? EXIT.interrupted : EXIT.done

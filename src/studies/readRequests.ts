@@ -12,15 +12,20 @@ const FORM = 'name[/illuminance][@theta,phi], e.g. chroma@45deg,90deg or ambient
 const GRAZING = Math.PI / 2
 
 /**
- * Metrics without a direction of their own look from `direction`.
+ * Metrics without a direction of their own look from `direction`; `option` is named in what is told of wrong ones.
  * @throws InputError with every problem found
  */
-export function readRequests(stack: Stack, texts: readonly string[], direction: Direction): MetricRequest[] {
+export function readRequests(
+  stack: Stack,
+  texts: readonly string[],
+  direction: Direction,
+  option = '--metric',
+): MetricRequest[] {
   const problems: Problem[] = []
   const requests = texts.flatMap((text) => {
     const request = readRequest(stack, text, direction)
     if (!('code' in request)) return [request]
-    problems.push(optionProblem(`--metric ${text}`, request))
+    problems.push(optionProblem(`${option} ${text}`, request))
     return []
   })
   if (problems.length > 0) throw new InputError(problems)

@@ -1,4 +1,4 @@
-import { compareJob } from './compare.js'
+import { compareJob } from './compareJob.js'
 import { coneRow } from './cone.js'
 import { optimizeJob } from './optimize.js'
 import type { Task } from './parallel.js'

@@ -1,8 +1,9 @@
-import { compareSheet } from '../../report/compareSheet.js'
+import { compareSheets } from '../../report/compareSheets.js'
 import { compareText } from '../../report/compareText.js'
 import { csvText } from '../../report/csvText.js'
 import { jsonText } from '../../report/jsonText.js'
-import { type CompareStore, type Comparison, compare, type FrontAxis } from '../../studies/compare.js'
+import { type Comparison, compare } from '../../studies/compare.js'
+import { readFront } from '../../studies/frontAxis.js'
 import { chartFiles } from '../chartFiles.js'
 import { compareStore } from '../compareStore.js'
 import type { Context } from '../context.js'
@@ -17,24 +18,27 @@ interface CompareOptions {
   readonly seed: number
   readonly keep: number
   readonly exhaustive: boolean
-  readonly front?: readonly FrontAxis[]
+  readonly front?: readonly string[]
 }
-
-const NO_STORE: CompareStore = { known: new Map(), keep: () => undefined }
 
 export async function run(context: Context<CompareOptions>): Promise<ExitCode> {
   const { file, options, terminal } = context
   const { stack } = await loadStack(context)
   requireQuestion(stack, 'compare', file)
+  const { seed, keep, exhaustive } = options
+  const front = options.front && readFront(stack, options.front)
   if (options.out !== undefined) await checkFolder(options.out)
   const stem = stemOf(file)
-  const store = options.out === undefined ? NO_STORE : compareStore(options.out, stem, stack, options.seed)
-  if (store.known.size > 0) terminal.note(`${store.known.size} results are in hand from an earlier run\n`)
-  const comparison = await runStudy(context, 'compare', (hooks, map) => compare(stack, options, hooks, map, store))
+  const store = options.out === undefined ? undefined : compareStore(options.out, stem, stack, seed)
+  if (store !== undefined && store.known.size > 0)
+    terminal.note(`${store.known.size} results are in hand from an earlier run\n`)
+  const comparison = await runStudy(context, 'compare', (hooks, map) =>
+    compare(stack, { seed, keep, exhaustive, ...(front && { front }) }, hooks, map, store),
+  )
   const json = jsonText(comparison)
   terminal.print(options.json ? json : compareText(stack, comparison, terminal.paint))
   await writeResults(context, async () => {
-    const charts = await chartFiles(stem, [compareSheet(stack, comparison)])
+    const charts = await chartFiles(stem, compareSheets(stack, comparison))
     return new Map<string, string | Uint8Array>([
       [`${stem}.compare.json`, json],
       [`${stem}.compare.csv`, candidatesCsv(comparison)],

@@ -27,10 +27,10 @@ const BEFORE_AND_AFTER = ['before', 'after']
 const ELLIPSES_NM = 550
 
 /** Sizes for two abreast, so that their texts are as large as those of a chart over the whole width, CSS pixels. */
-const HALF = { width: 480, height: 440 }
-const WIDE_HALF = { width: 480, height: 360 }
-/** Three over one another on a page. */
+const HALF = { width: 540, height: 490 }
+/** Three, or four, over one another on a page. */
 const LOW = { height: 410 }
+const LOWER = { height: 320 }
 
 export function reviewSheets(review: Review): ReviewSheets {
   const { title, designs, optimum, budgets, itinerary, tolerance, comparison } = review
@@ -58,7 +58,7 @@ export function reviewSheets(review: Review): ReviewSheets {
     ),
     spread: told(
       spread.filter(({ name }) => name.startsWith('spread')),
-      WIDE_HALF,
+      LOWER,
     ),
     sensitivity: told(spread.filter(({ name }) => name === 'sensitivity')),
     compare: told(comparison === undefined ? [] : compareSheets(stack, comparison)),
@@ -78,5 +78,5 @@ function withoutTitle(sheet: Sheet, title: string): Sheet {
 }
 
 function capitalized(text: string): string {
-  return text.charAt(0).toUpperCase() + text.slice(1)
+  return text.replace(/^[a-z]/, (letter) => letter.toUpperCase())
 }

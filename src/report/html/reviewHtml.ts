@@ -101,7 +101,7 @@ function sectionsOf(review: Review, { sheets, pictures }: PageParts): Section[] 
       title: 'Production',
       blocks: tolerance
         ? [
-            ...withFirst(about, pairs(sheets.spread)),
+            ...withFirst(about, each(sheets.spread)),
             ...each(sheets.sensitivity),
             ...toleranceSection(last.stack, tolerance),
           ]

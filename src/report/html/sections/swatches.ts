@@ -14,7 +14,7 @@ export function swatchesSection({ designs }: Review): Markup {
   const rows = designs[0].swatches.map((first, k) => ({ first, swatches: designs.map(({ swatches }) => swatches[k]) }))
   const { theta_deg, phi_deg } = designs[0].evaluation.directions[0]
   const clipped = designs.some(({ swatches }) => swatches.some((swatch) => swatch.clipped))
-  return html`<p>Seen from θ ${given(theta_deg)}° φ ${given(phi_deg)}°, as bright against black as it is against the white named on its left, which this screen’s or paper’s own white stands for. Surround: L* 10.</p>
+  return html`<p>Seen from θ ${given(theta_deg)}° φ ${given(phi_deg)}°. The white named on the left is given the white of this screen or paper, and the off-state is as bright against it as it would be there. Surround: L* 10 (#1c1c1c).</p>
 <div class="booth">
 ${unique(rows).map(
   ({ first, swatches }) => html`<div class="row">

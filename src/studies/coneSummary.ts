@@ -18,7 +18,7 @@ export interface ConeSummary {
 }
 
 /** Luminous reflectance over the cone: `luminous[θ][φ]`, at least head-on; angles in rad. */
-export interface ConeField {
+interface ConeField {
   readonly thetas: readonly number[]
   readonly phis: readonly number[]
   readonly luminous: readonly (readonly number[])[]

@@ -12,7 +12,7 @@ import { cu } from './published/cu.js'
 import { cycloOlefin } from './published/cycloOlefin.js'
 import { fusedSilica } from './published/fusedSilica.js'
 import { glass } from './published/glass.js'
-import { glassBk } from './published/glassBk.js'
+import { glassCrown } from './published/glassCrown.js'
 import { ito } from './published/ito.js'
 import { itoThin } from './published/itoThin.js'
 import { lc5cbNe } from './published/lc5cbNe.js'
@@ -64,7 +64,7 @@ export const PUBLISHED: Readonly<Record<string, PublishedMaterial>> = {
   cyclo_olefin: cycloOlefin,
   fused_silica: fusedSilica,
   glass,
-  glass_bk: glassBk,
+  glass_crown: glassCrown,
   ito,
   ito_thin: itoThin,
   lc_5cb_ne: lc5cbNe,

@@ -57,7 +57,7 @@ describe('against other published figures', () => {
 
   test.each([
     // nd and Abbe number stand in the title of the glass: (nd - 1) / (nF - nC), lines at 587.56, 486.13, 656.27 nm (ISO 7944).
-    ['glass_bk', 1.5168, 64.17, 0.01],
+    ['glass_crown', 1.5168, 64.17, 0.01],
     // From memory: fused silica 67.8.
     ['fused_silica', 1.4585, 67.8, 0.05],
     // From memory: PMMA 1.491 / 57, cyclo-olefin polymer 1.53 / 56. The published one-term fits run to 1052 nm and disperse

@@ -1,6 +1,6 @@
 import type { PublishedMaterial } from '../publishedMaterial.js'
 
-export const glassBk: PublishedMaterial = {
+export const glassCrown: PublishedMaterial = {
   title: 'borosilicate crown optical glass, nd=1.51680, Vd=64.17 (glass code 517642)',
   source: 'published catalogue Sellmeier constants for borosilicate crown glass 517642 (2017 edition)',
   via: 'CC0 refractive-index database of M. N. Polyanskiy',

@@ -1,4 +1,4 @@
-import { execFileSync } from 'node:child_process'
+import { type ExecFileSyncOptions, execFileSync } from 'node:child_process'
 import { existsSync } from 'node:fs'
 import { type Browser, chromium } from 'playwright-core'
 import { BROWSER_VARIABLE, findBrowser } from '../../src/cli/findBrowser.js'
@@ -23,7 +23,7 @@ function installChromium(): string {
   const advice = `No Chromium was found. Install one (Debian: apt-get install chromium), or name one in the variable ${BROWSER_VARIABLE}.`
   if (process.getuid?.() !== 0 || !existsSync('/usr/bin/apt-get')) throw new Error(advice)
   try {
-    const quiet = { stdio: ['ignore', 'ignore', 'inherit'] } as const
+    const quiet: ExecFileSyncOptions = { stdio: ['ignore', 'ignore', 'inherit'] }
     execFileSync('apt-get', ['update', '-qq'], quiet)
     execFileSync('apt-get', ['install', '-y', '-qq', '--no-install-recommends', 'chromium', 'fonts-liberation'], quiet)
   } catch (error) {

@@ -55,12 +55,14 @@ export class Bench {
     // The cone shows no contrast, which costs a second look from the axis.
     const stack = { ...this.stackAt(values), ambient: [] }
     const { thetas, phis } = coneGrid()
-    const rows = (await this.pool.map(coneRow, { stack, phis }, thetas)).filter((row) => row !== undefined)
+    // By reciprocity the reflectance repeats after half a turn.
+    const half = phis.slice(0, phis.length / 2)
+    const rows = (await this.pool.map(coneRow, { stack, phis: half }, thetas)).filter((row) => row !== undefined)
     return {
       theta_deg: thetas.map(degrees),
       phi_deg: phis.map(degrees),
-      luminous_reflectance: rows.map(({ luminous }) => luminous),
-      lab: rows.map(({ lab }) => lab),
+      luminous_reflectance: rows.map(({ luminous }) => [...luminous, ...luminous]),
+      lab: rows.map(({ lab }) => [...lab, ...lab]),
     }
   }
 

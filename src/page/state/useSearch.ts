@@ -15,6 +15,9 @@ export interface Search {
   readonly valuesOf: (found: FoundDesign) => Values
 }
 
+/** Finer than any film is cut, and given back exactly by the file they are saved to. */
+const FILE_DIGITS = 10
+
 /** The search of the file's `optimize` question; its best design is taken over as one step that can be undone. */
 export function useSearch(engine: Engine, design: Design): Search {
   const [state, setState] = useState<Pick<Search, 'running' | 'optimum' | 'fault'>>({})
@@ -22,7 +25,10 @@ export function useSearch(engine: Engine, design: Design): Search {
   const kinds = new Map(open?.parameters.map(({ path, kind }) => [path, kind]))
   const valuesOf = ({ parameters }: FoundDesign): Values =>
     Object.fromEntries(
-      Object.entries(parameters).map(([path, plain]) => [path, fromPlain(plain, kinds.get(path) ?? 'number')]),
+      Object.entries(parameters).map(([path, plain]) => [
+        path,
+        fromPlain(Number(plain.toPrecision(FILE_DIGITS)), kinds.get(path) ?? 'number'),
+      ]),
     )
   const start = async (): Promise<void> => {
     setState({ running: { done: 0, note: '' } })

@@ -1,4 +1,5 @@
 import { useRef } from 'preact/hooks'
+import { fromPlain } from '../../units/quantity.js'
 
 interface DialProps {
   readonly label: string
@@ -28,7 +29,8 @@ export function Dial({ label, axisRad, periodRad, onTurn }: DialProps) {
     const box = dial.current?.getBoundingClientRect() ?? { left: 0, top: 0, width: 0, height: 0 }
     return Math.atan2(box.top + box.height / 2 - clientY, clientX - box.left - box.width / 2) / DEGREE
   }
-  const turnTo = (degrees: number, gesture?: string): void => onTurn(wrapped(degrees, period) * DEGREE, gesture)
+  const turnTo = (degrees: number, gesture?: string): void =>
+    onTurn(fromPlain(wrapped(degrees, period), 'angle'), gesture)
   const start = (event: PointerEvent): void => {
     dial.current?.setPointerCapture(event.pointerId)
     grip.current = { offset: shown - pointerAt(event), gesture: `drag ${++gestures}` }

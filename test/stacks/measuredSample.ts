@@ -15,7 +15,7 @@ const DIRECTIONS_DEG = [
 ] as const
 const WAVELENGTHS_NM = Array.from({ length: 31 }, (_, i) => 400 + 10 * i)
 
-export const SAMPLE_NOISE = 0.0005
+const SAMPLE_NOISE = 0.0005
 const SEED = 20
 
 const HEAD = `# Invented demo data, no real product: no sample was measured. The reflectance of prototype A of the dive computer with

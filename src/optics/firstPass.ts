@@ -12,7 +12,8 @@ import { createLayerModes, type LayerModes } from './layerModes.js'
 import { apply } from './matrix4.js'
 import { createMedium, type Medium } from './opticalLayer.js'
 import { createPacket, faceBetween, type Packet } from './packet.js'
-import type { Slot, Solver } from './solver.js'
+import type { Slot } from './slot.js'
+import type { Solver } from './solver.js'
 
 /** Light at a place of its way. */
 export interface PassedLight {

@@ -7,32 +7,19 @@
  */
 import { type Above, closeStack, createAbove, extendAbove, extendAboveDiagonal, startAbove } from './above.js'
 import { addPacket, type Below, createBelow } from './adding.js'
-import { fillDiagonalModes } from './diagonalModes.js'
+import { endMedium } from './endMedium.js'
 import { Joiner } from './joining.js'
-import { createLayerModes, type LayerModes } from './layerModes.js'
 import { createMedium, type Medium, type OpticalLayer, type PanelEnd } from './opticalLayer.js'
 import { createPacket, faceBetween, type Packet } from './packet.js'
 import { type EmissionStokes, fillMirror } from './panel.js'
 import { perfectFace } from './perfectFace.js'
-import { fillPlanarModes } from './planarModes.js'
-import { fillTiltedModes } from './tiltedModes.js'
+import { createSlot, fillSlot, type Slot } from './slot.js'
+import { muellerOf, stokesOf } from './stokes.js'
 
 const UNPOLARIZED: EmissionStokes = [1, 0, 0, 0]
 
 /** The faces and coherent layers above the first thick layer: as they are, or reflecting nothing. */
 export type Front = 'real' | 'perfect'
-
-/** A medium's matrices and what they were computed from. */
-export interface Slot {
-  medium: Medium | undefined
-  thicknessNm: number
-  relativeAzimuthRad: number
-  tiltRad: number
-  xi: number
-  readonly modes: LayerModes
-  /** Recomputed in the call at hand. */
-  changed: boolean
-}
 
 /** Slots from the thick medium above to the thick medium below a packet. */
 export interface Segment {
@@ -174,16 +161,8 @@ export class Solver {
    */
   emissionStokes(out: Float64Array): void {
     const n = this.wavelengthsNm.length
-    const c = this.cosTheta
-    for (let i = 0; i < n; i++) {
-      const factor = this.fluxFactor(i)
-      const p = this.emitted[i] / (c * c)
-      const s = this.emitted[n + i]
-      out[i] = (p + s) * factor
-      out[n + i] = (p - s) * factor
-      out[2 * n + i] = (2 * this.emitted[2 * n + i] * factor) / c
-      out[3 * n + i] = (2 * this.emitted[3 * n + i] * factor) / c
-    }
+    stokesOf(this.emitted, this.cosTheta, out, n)
+    for (let c = 0; c < 4; c++) for (let i = 0; i < n; i++) out[c * n + i] *= this.fluxFactor(i)
   }
 
   /**
@@ -192,30 +171,8 @@ export class Solver {
    * the source, so -2 Im Ep Es* going in and +2 Im Ep Es* coming out: an ideal mirror is diag(1, 1, 1, -1).
    */
   mueller(out: Float64Array): void {
-    const n = this.wavelengthsNm.length
     this.fillLevels(this.segments.length)
-    const c = this.cosTheta
-    // Columns: coherency vector of each Stokes component; rows: back again.
-    const into = [c * c, 1, c, -c]
-    const w = this.levels[this.segments.length].w
-    for (let i = 0; i < n; i++) {
-      for (let row = 0; row < 4; row++) {
-        const x = w[4 * row * n + i] * into[0]
-        const y = w[(4 * row + 1) * n + i] * into[1]
-        out[4 * row * n + i] = (x + y) / 2
-        out[(4 * row + 1) * n + i] = (x - y) / 2
-        out[(4 * row + 2) * n + i] = (w[(4 * row + 2) * n + i] * into[2]) / 2
-        out[(4 * row + 3) * n + i] = (w[(4 * row + 3) * n + i] * into[3]) / 2
-      }
-      for (let column = 0; column < 4; column++) {
-        const p = out[column * n + i] / (c * c)
-        const s = out[(4 + column) * n + i]
-        out[column * n + i] = p + s
-        out[(4 + column) * n + i] = p - s
-        out[(8 + column) * n + i] *= 2 / c
-        out[(12 + column) * n + i] *= 2 / c
-      }
-    }
+    muellerOf(this.levels[this.segments.length].w, this.cosTheta, out, this.wavelengthsNm.length)
   }
 
   /** cos θ in air over m cos θm in the immersion medium: from tangential fields to flux. */
@@ -259,36 +216,7 @@ export class Solver {
     thicknessNm: number,
     xi: number,
   ): void {
-    this.fillSlot(this.slots[k], medium, azimuthRad, tilt, thicknessNm, xi)
-  }
-
-  private fillSlot(
-    slot: Slot,
-    medium: Medium,
-    azimuthRad: number,
-    tilt: number,
-    thicknessNm: number,
-    xi: number,
-  ): void {
-    const tiltRad = medium.isotropic ? 0 : tilt
-    const relativeAzimuthRad = medium.inPlaneIsotropic && tiltRad === 0 ? 0 : azimuthRad
-    slot.changed =
-      slot.medium !== medium ||
-      slot.xi !== xi ||
-      slot.thicknessNm !== thicknessNm ||
-      slot.relativeAzimuthRad !== relativeAzimuthRad ||
-      slot.tiltRad !== tiltRad
-    if (!slot.changed) return
-    slot.medium = medium
-    slot.xi = xi
-    slot.thicknessNm = thicknessNm
-    slot.relativeAzimuthRad = relativeAzimuthRad
-    slot.tiltRad = tiltRad
-    const { modes } = slot
-    if (tiltRad !== 0) {
-      fillTiltedModes(modes, medium, relativeAzimuthRad, tiltRad, thicknessNm, xi, this.waveNumbers)
-    } else if (medium.inPlaneIsotropic) fillDiagonalModes(modes, medium, thicknessNm, xi, this.waveNumbers)
-    else fillPlanarModes(modes, medium, relativeAzimuthRad, thicknessNm, xi, this.waveNumbers)
+    fillSlot(this.slots[k], medium, azimuthRad, tilt, thicknessNm, xi, this.waveNumbers)
   }
 
   /** The medium at the end and what it sends back; true where that changed. */
@@ -304,7 +232,7 @@ export class Solver {
     this.panel = panel
     this.panelXi = xi
     this.stokes = stokes
-    this.updateSlot(k, this.endMedium(panel, this.slots[k].medium), 0, 0, 0, xi)
+    this.updateSlot(k, endMedium(panel, this.slots[k].medium), 0, 0, 0, xi)
     const { w, e } = this.levels[0]
     if (panel.kind === 'mirror') fillMirror(panel, xi, stokes, this.levels[0], this.wavelengthsNm.length)
     else {
@@ -312,14 +240,6 @@ export class Solver {
       e.fill(0)
     }
     return true
-  }
-
-  /** The medium at the end: the metal, or the immersion of a mirror; `known` again where it is the same. */
-  private endMedium(panel: PanelEnd, known: Medium | undefined): Medium {
-    if (panel.kind === 'metal') return panel.medium
-    if (known !== undefined && sameIndex(known, panel.index)) return known
-    const index = { n: panel.index, k: new Float64Array(panel.index.length) }
-    return createMedium(index, index, index)
   }
 
   /** Joins the faces and coherent layers of packet j, and the thick layer above it; true where anything in it changed. */
@@ -365,11 +285,12 @@ export class Solver {
       const layer = layers[k - 1]
       if (layer === this.layers[k - 1]) continue
       mixed[k] = this.trial[k]
-      this.fillSlot(mixed[k], layer.medium, layer.azimuthRad - this.phiRad, layer.tiltRad, layer.thicknessNm, this.xi)
+      const { medium, azimuthRad, tiltRad, thicknessNm } = layer
+      fillSlot(mixed[k], medium, azimuthRad - this.phiRad, tiltRad, thicknessNm, this.xi, this.waveNumbers)
     }
     if (last === end && panel !== this.panel) {
       mixed[end] = this.trial[end]
-      this.fillSlot(mixed[end], this.endMedium(panel, this.slots[end].medium), 0, 0, 0, this.xi)
+      fillSlot(mixed[end], endMedium(panel, this.slots[end].medium), 0, 0, 0, this.xi, this.waveNumbers)
     }
     this.joinSegment(mixed, first, last, out)
     return true
@@ -392,23 +313,4 @@ export class Solver {
       this.frontReflectance[i] = (power(0, i) + power(6, i) + power(2, i) / c2 + power(4, i) * c2) / 2
     }
   }
-}
-
-function createSlot(count: number): Slot {
-  return {
-    medium: undefined,
-    thicknessNm: Number.NaN,
-    relativeAzimuthRad: Number.NaN,
-    tiltRad: Number.NaN,
-    xi: Number.NaN,
-    modes: createLayerModes(count),
-    changed: true,
-  }
-}
-
-/** Same lossless index at every wavelength: a panel whose reflectance alone changed keeps its immersion medium. */
-function sameIndex(medium: Medium | undefined, index: Float64Array): boolean {
-  if (medium === undefined) return false
-  for (let i = 0; i < index.length; i++) if (medium.permittivity[i] !== index[i] * index[i]) return false
-  return true
 }

@@ -75,16 +75,12 @@ function functionsAt(stack: Stack, question: OptimizeQuestion, wavelengths: Floa
 }
 
 /** The quantile of the objective under the file's tolerances, where the file asks for it. */
-function robustQuestion(
-  stack: Stack,
-  paths: readonly string[],
-  { quantile, sense }: Objective,
-): RobustQuestion | undefined {
+function robustQuestion(stack: Stack, paths: readonly string[], { quantile }: Objective): RobustQuestion | undefined {
   if (quantile === undefined) return undefined
   const { tolerance } = stack
   if (tolerance === undefined) throw new Error('a quantile needs the tolerances of the stack')
-  // What is maximized is searched as its negative, whose quantiles run the other way.
-  return { tolerance, paths, share: sense === 1 ? quantile : 1 - quantile }
+  // Of the objective with the sign of a minimum: this share of production does at least as well, also where the metric is maximized.
+  return { tolerance, paths, share: quantile }
 }
 
 function whenAsked<Args extends unknown[], Result>(make: () => (...args: Args) => Result): (...args: Args) => Result {

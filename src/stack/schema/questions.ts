@@ -28,7 +28,7 @@ const objective = z
       .meta({ description: 'Directions whose weighted mean counts.', examples: [[{ theta: '0 deg', weight: 1 }]] }),
     quantile: quantitySchema(
       CONDITION_LIMITS.quantile,
-      'Robust design: this quantile under the tolerances.',
+      'Robust design: the value that this share of production does at least as well as, under the tolerances.',
       '95 %',
     ).optional(),
     under: z.literal('tolerance').optional().meta({ description: 'Where the spreads of the quantile stand.' }),

@@ -20,12 +20,14 @@ export function numbers(heading: Content): TableColumn {
 /** The first cell of a row is its heading. */
 export function table(caption: string, columns: readonly TableColumn[], rows: readonly (readonly Content[])[]): Markup {
   const side = (k: number): string => (columns[k].align === 'right' ? 'number' : 'words')
-  const heading = ({ heading }: TableColumn, k: number) => html`<th scope="col" class="${side(k)}">${heading}</th>`
+  // A heading that says nothing is none to those who have the page read to them.
+  const head = ({ heading }: TableColumn, k: number) =>
+    heading === '' ? html`<td></td>` : html`<th scope="col" class="${side(k)}">${heading}</th>`
   const cell = (content: Content, k: number) =>
     k === 0 ? html`<th scope="row" class="${side(k)}">${content}</th>` : html`<td class="${side(k)}">${content}</td>`
   return html`<div class="wide" tabindex="0" role="region" aria-label="table: ${caption}"><table>
 <caption>${caption}</caption>
-<thead><tr>${columns.map(heading)}</tr></thead>
+<thead><tr>${columns.map(head)}</tr></thead>
 <tbody>${rows.map((cells) => html`<tr>${cells.map(cell)}</tr>\n`)}</tbody>
 </table></div>`
 }

@@ -12,5 +12,7 @@ export default defineConfig({
     target: 'es2022',
     modulePreload: { polyfill: false },
     reportCompressedSize: false,
+    // Workers are built one inside the other; that this takes most of the time is no news.
+    rolldownOptions: { checks: { pluginTimings: false } },
   },
 })

@@ -44,7 +44,11 @@ test('an engineer opens the dive computer, sees limits missed, optimizes, saves;
   await page.getByRole('button', { name: 'spectra, CSV' }).click()
   const csv = readFileSync(await (await download).path(), 'utf8')
   const evaluated = JSON.parse((await offblack(['evaluate', FILE, '--json'], tune.folder)).stdout)
-  expect(reflectances(csv)).toEqual(evaluated.directions.flatMap((d: Evaluated) => d.spectrum.reflectance))
+  const spectra: number[] = evaluated.directions.flatMap((d: Evaluated) => d.spectrum.reflectance)
+  // Two releases of the JavaScript engine: a sine may differ in its last bit, 1e-16.
+  const differences = reflectances(csv).map((value, k) => Math.abs(value - spectra[k]))
+  expect(differences.length).toBe(spectra.length)
+  expect(Math.max(...differences)).toBeLessThan(1e-15)
   for (const limit of evaluated.limits) {
     expect(await page.locator('.limits').textContent()).toContain(shownAs(limit))
   }

@@ -54,18 +54,24 @@ test('as plain files: a demo stack opens, a saved file is a download', async () 
   expect(complaints).toEqual([])
 })
 
-test('a picked file opens, tells what it misses, and opens with its tables', async () => {
-  const file = join(ROOT, 'stacks', 'survey-watch.stack.yaml')
+test('a picked file opens; one that misses its tables says so; a picked folder has them', async () => {
+  const file = join(ROOT, 'stacks', 'tide-board.stack.yaml')
   const { page, complaints } = await visit(browser, address)
   await page.locator('input[type="file"]').first().setInputFiles(file)
   await shown(page)
-  expect(await figure(page, 'luminous_reflectance')).toBe(await byCommand('survey-watch.stack.yaml'))
+  expect(await figure(page, 'luminous_reflectance')).toBe(await byCommand('tide-board.stack.yaml'))
   await page.getByRole('button', { name: 'open' }).click()
   await page
     .locator('input[type="file"]')
     .first()
     .setInputFiles(join(ROOT, 'stacks', 'dive-computer.stack.yaml'))
-  await page.getByText('the file cannot be read').first().waitFor()
+  await page.locator('.problems', { hasText: 'the file cannot be read' }).waitFor()
+  await page.getByRole('button', { name: 'open' }).click()
+  await page.locator('input[type="file"]').last().setInputFiles(join(ROOT, 'stacks'))
+  await page.getByRole('heading', { name: 'picked' }).waitFor()
+  await page.getByRole('button', { name: 'dive-computer.stack.yaml' }).first().click()
+  await shown(page)
+  expect(await figure(page, 'luminous_reflectance')).toBe(await byCommand('dive-computer.stack.yaml'))
   expect(complaints).toEqual([])
 })
 

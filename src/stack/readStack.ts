@@ -15,6 +15,7 @@ import type { RawCompare } from './schema/questions.js'
 import { stackSchema } from './schema/stackSchema.js'
 import { indexFaults } from './sense/indices.js'
 import { duplicateIdFaults } from './sense/layerIds.js'
+import { lightFaults } from './sense/lights.js'
 import { metricFaults } from './sense/metrics.js'
 import { pathFaults } from './sense/paths.js'
 import { polarizerFaults } from './sense/polarizers.js'
@@ -157,6 +158,7 @@ async function senseFaults(sense: Sense): Promise<PlacedFault[]> {
   return [
     ...duplicateIdFaults(sense),
     ...indices,
+    ...lightFaults(sense),
     ...(computable ? polarizerFaults(sense) : []),
     ...pathFaults(sense),
     ...metricFaults(sense),

@@ -9,6 +9,9 @@ import type { StackFiles } from './stackFiles.js'
 /** Points of one spectrum at most. */
 export const MOST_POINTS = 20_000
 
+/** In a heading; not the letters within a word such as spectrum. */
+const MICROMETERS = /(?<![a-z])(um|µm|μm)(?![a-z])/i
+
 /** A file that cannot be used, with the line in it where one is to blame. */
 export interface TableFault extends Fault {
   readonly inFile?: Pick<Problem, 'file' | 'range'>
@@ -63,7 +66,7 @@ export class TableFiles {
         rows[0].line,
       )
     }
-    const scale = /um|µm|μm/.test(heading?.[0] ?? '') ? 1000 : 1
+    const scale = MICROMETERS.test(heading?.[0] ?? '') ? 1000 : 1
     const sorted = [...rows].sort((a, b) => a.values[0] - b.values[0])
     for (let i = 0; i < sorted.length; i++) {
       const fault = wavelengthFault(sorted[i].values[0] * scale, i > 0 ? sorted[i - 1].values[0] * scale : 0)

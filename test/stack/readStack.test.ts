@@ -207,7 +207,20 @@ describe('warnings', () => {
     const reading = await readStack(text, { file: 'x' })
     expect(reading).toMatchObject({
       ok: true,
-      warnings: [{ code: 'material_range', severity: 'warning', range: { line: 3 } }],
+      warnings: [{ code: 'index_range', severity: 'warning', range: { line: 3 } }],
+    })
+  })
+})
+
+describe('warnings of tables', () => {
+  it('tell one that ends within the band, and what becomes of it there', async () => {
+    const text = `${withLayers('  - {id: a, kind: isotropic, index: {file: nk.csv}, thickness: 5 um}')}`
+    const files = filesFrom({ 'nk.csv': 'spectrum_nm,n,k\n400,1.5,0\n700,1.5,0\n' })
+    expect(await readStack(text, { file: 'x', files })).toMatchObject({
+      ok: true,
+      warnings: [
+        { code: 'index_range', message: expect.stringContaining('from 700 to 780 nm its end values are held') },
+      ],
     })
   })
 })

@@ -3,8 +3,7 @@
 import { prepareFormula } from '../../materials/formula.js'
 import { indexAt } from '../../materials/indexAt.js'
 import type { IndexLaw } from '../../materials/indexLaw.js'
-import { findMaterial } from '../../materials/material.js'
-import { formatQuantity } from '../../units/quantity.js'
+import { outsideRange } from '../../materials/outsideRange.js'
 import type { Fault, PathKey, PlacedFault } from '../fault.js'
 import { FIELD_LIMITS } from '../fieldLimits.js'
 import { wavelengthsOf } from '../wavelengths.js'
@@ -99,27 +98,17 @@ function clarityFaults({ panel, layers }: Sense['draft'], wavelengths: Float64Ar
   return faults
 }
 
-/** Once for each material used outside the wavelengths its figures were published for. */
+/** Once for each material, and for each table, used outside the wavelengths of its figures. */
 function rangeWarnings(laws: readonly PlacedLaw[], wavelengths: Float64Array): PlacedFault[] {
   const told = new Set<string>()
   return laws.flatMap(({ at, law }): PlacedFault[] => {
-    if (typeof law === 'number' || !('material' in law) || told.has(law.material)) return []
-    const material = findMaterial(law.material)
-    if (material === undefined) return []
-    const [from, to] = material.rangeNm
-    const [first, last] = [wavelengths[0], wavelengths[wavelengths.length - 1]]
-    if (first >= from && last <= to) return []
-    told.add(law.material)
-    return [
-      {
-        at: [...at, 'material'],
-        severity: 'warning',
-        code: 'material_range',
-        message: `${law.material} is used outside the wavelengths its figures were published for`,
-        received: `${formatQuantity(first, 'length')} to ${formatQuantity(last, 'length')}`,
-        allowed: `${formatQuantity(from, 'length')} to ${formatQuantity(to, 'length')}`,
-        next: 'take figures beyond the range with caution',
-      },
-    ]
+    const message = outsideRange(law, wavelengths[0], wavelengths[wavelengths.length - 1])
+    if (message === undefined) return []
+    const material = typeof law === 'object' && 'material' in law ? law.material : undefined
+    if (material !== undefined && told.has(material)) return []
+    if (material !== undefined) told.add(material)
+    const place = material === undefined ? at : [...at, 'material']
+    const next = 'take figures beyond the range with caution'
+    return [{ at: place, severity: 'warning', code: 'index_range', message, next }]
   })
 }

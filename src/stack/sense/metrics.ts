@@ -92,7 +92,14 @@ function strayIlluminance(metric: MetricName): Fault {
 }
 
 function quantileFaults(quantile: number | undefined, at: readonly PathKey[], { raw }: Sense): PlacedFault[] {
-  if (quantile === undefined || valueAt(raw, ['tolerance']) !== undefined) return []
+  if (quantile === undefined) return valueAt(raw, [...at, 'under']) === undefined ? [] : [strayUnder(at)]
+  if (valueAt(raw, ['tolerance']) !== undefined) return []
   const message = 'a quantile needs spreads to be drawn from'
   return [{ at: [...at, 'quantile'], code: 'missing_key', message, next: 'add tolerance with the spreads' }]
+}
+
+function strayUnder(at: readonly PathKey[]): PlacedFault {
+  const message = 'under means nothing without a quantile'
+  const next = 'add quantile, such as 95 %, or remove under'
+  return { at: [...at, 'under'], code: 'not_applicable', message, allowed: 'under together with quantile', next }
 }

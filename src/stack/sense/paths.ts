@@ -69,7 +69,7 @@ function unknownId(id: string, field: string, known: readonly string[]): Fault {
 function fieldFault(id: string, field: string, fields: readonly Field[], owner: object): Fault | undefined {
   const known = fields.map(({ path }) => path)
   if (known.includes(field)) return undefined
-  const allowed = known.map((path) => `${id}.${path}`).join(', ')
+  const allowed = known.map((path) => `${id}.${path}`).join(', ') || `nothing: no field of ${id} is a single number`
   const stands = field !== '' && valueAt(owner, field.split('.')) !== undefined
   if (stands) {
     return {

@@ -125,7 +125,8 @@ function ellipseOf([s0, s1, s2, s3]: Stokes) {
   const polarized = Math.hypot(s1, s2, s3)
   const azimuth = degrees(Math.atan2(s2, s1) / 2)
   return {
-    azimuth_deg: azimuth < 0 ? azimuth + 180 : azimuth,
+    // A hair below 0 would be rounded to 180.
+    azimuth_deg: azimuth < 0 ? (azimuth + 180) % 180 : azimuth,
     ellipticity_deg: polarized > 0 ? degrees(Math.asin(Math.max(-1, Math.min(1, s3 / polarized))) / 2) : 0,
     degree_of_polarization: s0 > 0 ? Math.min(1, polarized / s0) : 0,
   }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import type { Stack } from '../../src/stack/stack.js'
+import type { PolarizerLayer, Stack } from '../../src/stack/stack.js'
 import { type ItineraryQuestion, itinerary } from '../../src/studies/itinerary.js'
 import { DEG, glass, polarizer, retarder, stackOf } from './builtStack.js'
 
@@ -15,6 +15,18 @@ function pass(stack: Stack, layer: string, direction: 'in' | 'out', question = H
 function expectAzimuth(actualDeg: number, expectedDeg: number): void {
   expect(Math.abs(Math.sin((actualDeg - expectedDeg) * DEG))).toBeLessThan(1e-4)
 }
+
+it('tells azimuths from 0 to below 180°, also where rounding leaves a hair below 0', () => {
+  const sheet: PolarizerLayer = {
+    ...{ id: 'sheet', kind: 'polarizer', index: 1.5, thickness: 12_000, coherent: false },
+    ...{ absorption_axis: 90 * DEG, single_transmittance: 0.43, polarization_efficiency: 0.999 },
+  }
+  const stack = stackOf([sheet, retarder('quarter', 45, 137.5)])
+  const wavelengthsNm = Array.from({ length: 81 }, (_, k) => 380 + 5 * k)
+  const azimuths = itinerary(stack, { wavelengthsNm, theta: 0, phi: 0 }).passes.map((p) => p.azimuth_deg)
+  expect(Math.min(...azimuths)).toBeGreaterThanOrEqual(0)
+  expect(Math.max(...azimuths)).toBeLessThan(180)
+})
 
 /** Common practice, no source: what a polarizer with a quarter-wave film over a mirror does. */
 describe('polarizer and quarter-wave film over a mirror', () => {

@@ -2,11 +2,11 @@ import { appearanceSheets } from '../../report/appearanceSheets.js'
 import { jsonText } from '../../report/jsonText.js'
 import { optimizeText } from '../../report/optimizeText.js'
 import { searchSheet } from '../../report/searchSheet.js'
-import { findParameter, setParameters } from '../../stack/parameters.js'
+import { setParameters } from '../../stack/parameters.js'
 import type { Stack } from '../../stack/stack.js'
+import { bestValues } from '../../studies/bestValues.js'
 import { evaluate } from '../../studies/evaluate.js'
-import { type Optimum, optimize } from '../../studies/optimize.js'
-import { fromPlain } from '../../units/quantity.js'
+import { optimize } from '../../studies/optimize.js'
 import { chartFiles } from '../chartFiles.js'
 import type { Context } from '../context.js'
 import { EXIT, type ExitCode } from '../exitCode.js'
@@ -45,15 +45,6 @@ export async function run(context: Context<OptimizeOptions>): Promise<ExitCode> 
   })
   if (optimum.interrupted) return EXIT.interrupted
   return limits.every(({ met }) => met) && optimum.best.violation === 0 ? EXIT.done : EXIT.limitMissed
-}
-
-/** Parameters of the best design in nm, rad, fractions. */
-function bestValues(stack: Stack, { best }: Optimum): Record<string, number> {
-  const values = Object.entries(best.parameters).map(([path, plain]) => {
-    const kind = findParameter(stack, path)?.kind ?? 'number'
-    return [path, fromPlain(plain, kind)] as const
-  })
-  return Object.fromEntries(values)
 }
 
 function beforeAndAfter(stack: Stack, improved: Stack) {

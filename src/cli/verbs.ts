@@ -153,7 +153,7 @@ export const VERBS: readonly Verb[] = [
       new Option('--measured <csv>', 'spectra of the sample').makeOptionMandatory(),
       new Option('--seed <number>', 'of the starts').argParser(wholeNumber(0, 2 ** 31 - 1)).default(1),
     ],
-    example: 'fit stacks/dive-computer.stack.yaml --measured stacks/measured/dive-computer.csv',
+    example: 'fit stacks/dive-computer.stack.yaml --measured stacks/measured/dive-computer-prototype-a.csv',
     load: () => import('./verbs/fit.js'),
   },
   {

@@ -3,7 +3,7 @@
  * The front face and the direction are not in the stack: whoever looks at it takes them away.
  */
 import { meanIndexOf } from '../appearance/meanIndex.js'
-import { retardanceAt550 } from '../stack/retardanceAt550.js'
+import { REFERENCE_NM, retardanceAt550 } from '../stack/retardanceAt550.js'
 import type { CrystalLayer, Layer, PolarizerLayer, RetarderLayer, Stack } from '../stack/stack.js'
 import {
   withImmersion,
@@ -125,6 +125,7 @@ function retards({ indices, tilt }: CrystalLayer): boolean {
   return tilt !== 0 || indices[0] !== indices[1]
 }
 
+/** rad, at 550 nm. */
 function phase(retardanceNm: number): number {
-  return (2 * Math.PI * retardanceNm) / 550
+  return (2 * Math.PI * retardanceNm) / REFERENCE_NM
 }

@@ -7,8 +7,8 @@ const TURN_RAD = Math.PI / 18
 const MOST_SLICES = 72
 
 /**
- * A layer cut into equal slices that together are the layer, thin enough that one turns light of `wavelengthNm` by no more
- * than 10°; the layer itself where nothing turns, or where it turns more than twice round.
+ * A layer cut into equal slices that together are the layer, thin enough that one turns light of `wavelengthNm` by about 10°
+ * at most (the dispersion of a retarder is not asked); the layer itself where nothing turns, or where it turns more than twice round.
  */
 export function slicesOf(layer: Layer, wavelengthNm: number): Layer[] {
   const turn = (2 * Math.PI * pathDifferenceNm(layer, wavelengthNm)) / wavelengthNm

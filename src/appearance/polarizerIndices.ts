@@ -58,7 +58,7 @@ export const SMALLEST_TRANSMITTANCE = 1e-12
  * T of K = (1 - ρ)² T/(1 - ρ² T²): the positive root of ρ² K T² + (1 - ρ)² T - K = 0, written so that nothing cancels.
  * Above 1 where the faces cannot give K (refused when the file is read; a search that strays there is held at 1).
  */
-export function internalFromAir(k: number, n: number): number {
+function internalFromAir(k: number, n: number): number {
   const rho = ((n - 1) / (n + 1)) ** 2
   const b = (1 - rho) ** 2
   const t = (2 * k) / (b + Math.sqrt(b * b + 4 * rho * rho * k * k))

@@ -55,7 +55,7 @@ export function paintEllipse(
 }
 
 /** Right, left and linear each have a color; the turn of the arrow says it without. */
-export function handColor({ ellipticityRad }: Polarization, theme: Theme): string {
+function handColor({ ellipticityRad }: Polarization, theme: Theme): string {
   if (Math.abs(ellipticityRad) <= LINEAR_RAD) return theme.ink
   return theme.series[ellipticityRad > 0 ? 0 : 1].color
 }

@@ -17,7 +17,7 @@ export interface FormulaFault {
 }
 
 /** Variables of a formula for a refractive index. */
-export const INDEX_VARIABLES = ['wavelength_nm', 'wavelength_um'] as const
+const INDEX_VARIABLES = ['wavelength_nm', 'wavelength_um'] as const
 
 /** Compiled formulas of this thread; a worker prepares its own. */
 const prepared = new Map<string, Evaluate>()

@@ -28,6 +28,6 @@ const ESC = String.fromCharCode(27)
 const COLOR = new RegExp(`${ESC}\\[[0-9;]*m`, 'g')
 
 /** Characters as seen: colors have no width. */
-export function widthOf(text: string): number {
+function widthOf(text: string): number {
   return [...text.replace(COLOR, '')].length
 }

@@ -47,7 +47,7 @@ export function panelEnd(panel: PlainPanel, wavelengthsNm = WAVELENGTHS_NM): Pan
   }
 }
 
-export function isotropicMedium(n: number, k: number, count: number): Medium {
+function isotropicMedium(n: number, k: number, count: number): Medium {
   const index = constantIndex(n, k, count)
   return createMedium(index, index, index)
 }

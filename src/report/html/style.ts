@@ -65,11 +65,11 @@ td, tbody th { white-space: nowrap; }
 .row b { color: #fff; font-weight: normal; }
 .tile { flex: 1 1 0; min-width: 0; }
 .patch { height: 96px; }
-.tile p { margin: 8px 10px 0 0; line-height: 1.45; }
+.tile p { margin: 8px 10px 0 0; line-height: 1.45; overflow-wrap: anywhere; }
 footer { padding-top: 18px; padding-bottom: 40px; font-size: 13px; color: #555; overflow-wrap: anywhere; }
 code { font: inherit; }
 .live img { display: none; }
-@media (max-width: 760px) { .pairs { grid-template-columns: minmax(0, 1fr); } dl { grid-template-columns: minmax(0, 1fr); } .row { flex-wrap: wrap; } .row > p { flex-basis: 100%; padding-bottom: 8px; } }
+@media (max-width: 760px) { .pairs { grid-template-columns: minmax(0, 1fr); } dl { grid-template-columns: minmax(0, 1fr); } .row { flex-wrap: wrap; } .row > p { flex-basis: 100%; padding: 0 0 8px; } }
 @page { margin: 16mm 16mm 18mm; }
 @media print {
   body { font-size: 9pt; }

@@ -42,5 +42,5 @@ function whiteText({ illuminance_lx, relative_to, white_luminance }: OffStateSwa
 }
 
 function tile(name: string, { srgb, off_luminance, relative_luminance }: OffStateSwatch): Content {
-  return html`<div class="tile"><div class="patch" style="background:${srgb}"></div><p>${name}<br>${figure(off_luminance, numberText(off_luminance))} cd/m², ${figure(relative_luminance, numberText(100 * relative_luminance))} % · ${srgb}</p></div>`
+  return html`<div class="tile"><div class="patch" style="background:${srgb}"></div><p>${name}<br>${figure(off_luminance, numberText(off_luminance))} cd/m²<br>${figure(relative_luminance, numberText(100 * relative_luminance))} % · ${srgb}</p></div>`
 }

@@ -35,6 +35,7 @@ export function Bench({ open, design, shown, budget, search, place, onPlace, the
         values={design.history.present}
         itinerary={view.itinerary}
         theme={slabTheme}
+        roomTheme={theme}
         onSet={design.set}
       />
       <Look stack={open.stack} shown={shown} place={place} onPlace={onPlace} theme={theme} />

@@ -11,7 +11,7 @@ interface DialProps {
 }
 
 const DEGREE = Math.PI / 180
-const SIZE_PX = 46
+const SIZE_PX = 40
 const RADIUS = 19
 /** A hand on a pointer is no finer than this. */
 const DRAG_STEP_DEG = 0.1

@@ -11,12 +11,14 @@ interface LaminateProps {
   readonly open: OpenDesign
   readonly values: Values
   readonly itinerary: Itinerary | undefined
+  /** Of what stands in the slab, and of what stands in the room above it. */
   readonly theme: Theme
+  readonly roomTheme: Theme
   readonly onSet: (changes: Values, gesture?: string) => void
 }
 
 /** The laminate edge-on, the room above, the panel below; between the sheets the state of the light, in and back. */
-export function Laminate({ open, values, itinerary, theme, onSet }: LaminateProps) {
+export function Laminate({ open, values, itinerary, theme, roomTheme, onSet }: LaminateProps) {
   const { layers } = open.stack
   const [selected, select] = useState<string>()
   const passes = itinerary?.passes ?? []
@@ -33,7 +35,7 @@ export function Laminate({ open, values, itinerary, theme, onSet }: LaminateProp
         viewer sees it.
       </p>
       <div class="slab">
-        <Face below="" above="room" incoming={undefined} returning={find('air', 'out')} theme={theme} />
+        <Face below="" above="room" incoming={undefined} returning={find('air', 'out')} theme={roomTheme} />
         {layers.map((layer, k) => {
           const next = layers[k + 1]?.id ?? 'panel'
           return (

@@ -26,7 +26,11 @@ export function Sheet({ layer, parameters, values, selected, onSelect, onSet }: 
   const thicknessNm = thickness === undefined ? layer.thickness : present(thickness)
   const shown = turns ? [axis, retardance].filter((found) => found !== undefined) : []
   return (
-    <div class={`sheet ${layer.kind}`} style={{ height: `${sheetHeightPx(thicknessNm)}px` }} aria-current={selected}>
+    <div
+      class={`sheet ${layer.kind}`}
+      style={{ height: `${HAND_ROOM_PX + sheetHeightPx(thicknessNm)}px` }}
+      aria-current={selected}
+    >
       <span class="thickness">{thicknessText(thicknessNm)}</span>
       <button type="button" class="sheet-name" aria-expanded={selected} onClick={onSelect}>
         {layer.id.replaceAll('_', ' ')}
@@ -53,5 +57,8 @@ export function Sheet({ layer, parameters, values, selected, onSelect, onSet }: 
     </div>
   )
 }
+
+/** More than on paper, so that a dial has room in the thinnest coating. */
+const HAND_ROOM_PX = 10
 
 const AXES = ['slow_axis', 'absorption_axis', 'azimuth'] as const

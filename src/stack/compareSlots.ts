@@ -32,8 +32,13 @@ export function readSlots(
   const reading: SlotReading = { slots: {}, faults: [], problems: [] }
   for (const [id, globs] of Object.entries(compare.slots)) {
     const layer = isMapping(raw) && Array.isArray(raw.layers) ? raw.layers[ids.indexOf(id)] : undefined
-    if (isMapping(layer)) reading.slots[id] = globs.flatMap((glob, g) => readGlob(id, glob, g, layer))
-    else reading.faults.push(unknownSlot(id, ids))
+    if (!isMapping(layer)) {
+      reading.faults.push(unknownSlot(id, ids))
+      continue
+    }
+    // A card that two patterns find is one candidate.
+    const found = globs.flatMap((glob, g) => readGlob(id, glob, g, layer))
+    reading.slots[id] = [...new Map(found.map((card) => [card.file, card])).values()]
   }
   return reading
 

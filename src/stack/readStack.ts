@@ -81,8 +81,10 @@ class StackReader {
     const raw = this.override(this.layFilms(this.override(written, films)), others)
     const { draft, faults } = parseDraft(this.schema, raw)
     this.faults.push(...faults, ...exclusiveIn(raw), ...(await senseFaults({ draft, raw })))
-    const { compare, ...sections } = draft
-    const whole = { ...sections, ...(compare && { compare: this.readCompare(compare, raw) }) }
+    const { compare: asked, ...sections } = draft
+    const compare = asked && this.readCompare(asked, raw)
+    if (compare !== undefined) await this.checkCards(compare, draft)
+    const whole = { ...sections, ...(compare && { compare }) }
     return this.conclude(whole, { source: this.source, overrides, filmed: this.filmed })
   }
 
@@ -124,6 +126,17 @@ class StackReader {
     return { ...compare, slots }
   }
 
+  /** A film that fills a slot must be one that can be, as if it stood in the file. */
+  private async checkCards({ slots }: CompareQuestion, { conditions }: Draft): Promise<void> {
+    for (const { file, layer } of Object.values(slots).flat()) {
+      const source = this.cards.card(file)?.source
+      const faults = await filmFaults({ draft: { conditions, layers: [layer] }, raw: undefined })
+      for (const { at, key, ...fault } of faults) {
+        if (source !== undefined) this.problems.push(source.problem(fault, at.slice(2), key))
+      }
+    }
+  }
+
   private conclude(draft: Omit<Draft, 'compare'> & { compare?: CompareQuestion }, origins: Origins): Reading {
     const placed = this.faults.filter(isNoSequel(this.faults)).flatMap((fault) => placeFault(fault, origins) ?? [])
     const used = [...this.cards.all()]
@@ -153,16 +166,20 @@ function exclusiveIn(raw: unknown): PlacedFault[] {
 }
 
 async function senseFaults(sense: Sense): Promise<PlacedFault[]> {
-  const indices = await indexFaults(sense)
-  const computable = indices.every(({ severity }) => severity === 'warning')
   return [
     ...duplicateIdFaults(sense),
-    ...indices,
+    ...(await filmFaults(sense)),
     ...lightFaults(sense),
-    ...(computable ? polarizerFaults(sense) : []),
     ...pathFaults(sense),
     ...metricFaults(sense),
   ]
+}
+
+/** Of the layers and the panel themselves. */
+async function filmFaults(sense: Sense): Promise<PlacedFault[]> {
+  const indices = await indexFaults(sense)
+  const computable = indices.every(({ severity }) => severity === 'warning')
+  return [...indices, ...(computable ? polarizerFaults(sense) : [])]
 }
 
 function withoutRepeats(problems: readonly Problem[]): Problem[] {

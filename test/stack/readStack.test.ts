@@ -191,6 +191,21 @@ compare: {slots: {quarter: films/*.film.yaml}, optimize: true}`
     ])
   })
 
+  it('found by two patterns are one candidate', async () => {
+    const text = `${withLayers(QUARTER)}\ncompare: {slots: {quarter: [films/a.film.yaml, films/*.film.yaml]}}`
+    const { compare } = await stackOf(text, { files })
+    expect(compare?.slots.quarter.map(({ file }) => file)).toEqual(['films/a.film.yaml', 'films/b.film.yaml'])
+  })
+
+  it('that no film can be are refused in a slot as in a layer', async () => {
+    const clear =
+      'name: C\nkind: polarizer\nthickness: 12 um\nsingle_transmittance: 49 %\npolarization_efficiency: 99 %\n'
+    const layer = '  - {id: pol, kind: polarizer, thickness: 12 um, k1: 85 %, k2: 0.01 %}'
+    const text = `${withLayers(layer)}\ncompare: {slots: {pol: [clear.film.yaml]}}`
+    const problems = await problemsOf(text, { files: filesFrom({ 'clear.film.yaml': clear }) })
+    expect(problems).toMatchObject([{ file: 'clear.film.yaml', code: 'faces', range: { line: 4 } }])
+  })
+
   it('of another kind than their slot are refused', async () => {
     const text = `${withLayers(QUARTER)}\ncompare: {slots: {quarter: [pol.film.yaml, none-*.film.yaml]}}`
     expect((await problemsOf(text, { files })).map(({ file, code }) => [file, code])).toEqual([

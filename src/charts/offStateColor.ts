@@ -62,18 +62,30 @@ interface Circle {
   readonly text: string
   readonly color: string
   readonly dash: readonly number[]
-  /** Where on the circle its text stands: 1 above, -1 below the neutral point. */
-  readonly side: 1 | -1
+  /** Where on the circle its text stands, counter-clockwise from +a*. */
+  readonly textAngleRad: number
 }
 
 /** Only circles that can be told apart. */
 function circlesWithin(reach: number, limitChroma: number | undefined, theme: Theme): Circle[] {
   const circles = CIRCLE_CHROMAS.filter((chroma) => chroma < reach && chroma > reach / 9).map(
-    (chroma): Circle => ({ chroma, text: `C*ab = ${chroma}`, color: theme.muted, dash: [3, 3], side: 1 }),
+    (chroma): Circle => ({
+      chroma,
+      text: `C*ab = ${chroma}`,
+      color: theme.muted,
+      dash: [3, 3],
+      textAngleRad: (5 * Math.PI) / 4,
+    }),
   )
   if (limitChroma === undefined) return circles
   const text = `limit C*ab = ${givenText({ unit: '', factor: 1 }, limitChroma)}`
-  return [...circles, { chroma: limitChroma, text, color: theme.limit, dash: [], side: -1 }]
+  // A circle next to that of the limit would strike its text.
+  const apart = circles.filter(({ chroma }) => Math.abs(chroma / limitChroma - 1) > 0.15)
+  return [...apart, { chroma: limitChroma, text, color: theme.limit, dash: [], textAngleRad: (7 * Math.PI) / 4 }]
+}
+
+function textPlace({ chroma, textAngleRad }: Pick<Circle, 'chroma' | 'textAngleRad'>): AB {
+  return [chroma * Math.cos(textAngleRad), chroma * Math.sin(textAngleRad)]
 }
 
 function paintPlane(pen: Pen, { area, at }: Plane, circles: readonly Circle[], theme: Theme): void {
@@ -84,7 +96,7 @@ function paintPlane(pen: Pen, { area, at }: Plane, circles: readonly Circle[], t
   pen.textAlign = 'center'
   pen.textBaseline = 'middle'
   pen.lineWidth = 1
-  for (const { chroma, text, color, dash, side } of circles) {
+  for (const { chroma, text, color, dash, textAngleRad } of circles) {
     pen.strokeStyle = color
     pen.setLineDash(dash)
     pen.beginPath()
@@ -92,9 +104,11 @@ function paintPlane(pen: Pen, { area, at }: Plane, circles: readonly Circle[], t
     pen.stroke()
     const width = pen.measureText(text).width + 6
     pen.fillStyle = theme.paper
-    pen.fillRect(x0 - width / 2, at('y', side * chroma) - 9, width, 18)
+    const [a, b] = textPlace({ chroma, textAngleRad })
+    const [x, y] = [at('x', a), at('y', b)]
+    pen.fillRect(x - width / 2, y - 9, width, 18)
     pen.fillStyle = color
-    pen.fillText(text, x0, at('y', side * chroma))
+    pen.fillText(text, x, y)
   }
   strokeSegment(pen, [x0 - 7, y0], [x0 + 7, y0], { color: theme.ink, width: 2 })
   strokeSegment(pen, [x0, y0 - 7], [x0, y0 + 7], { color: theme.ink, width: 2 })
@@ -122,7 +136,7 @@ function paintPoints(
   const placer = new LabelPlacer(pen, theme, area)
   const pixel = ([a, b]: AB): Pixel => [at('x', a), at('y', b)]
   placer.reserve(...pixel([0, 0]), 8)
-  for (const { chroma, side } of circles) placer.reserve(...pixel([0, side * chroma]), 52, 9)
+  for (const circle of circles) placer.reserve(...pixel(textPlace(circle)), 52, 9)
   for (const { before, after } of points) {
     placer.reserve(...pixel(after), theme.markerRadius + 2)
     if (!before) continue

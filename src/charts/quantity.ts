@@ -70,5 +70,6 @@ export function givenText(quantity: Pick<Quantity, 'unit' | 'factor'>, value: nu
 /** `θ 45°, φ 90°`. */
 export function directionText(direction: { readonly thetaRad: number; readonly phiRad: number }): string {
   const degrees = (rad: number): string => `${Number(((rad * 180) / Math.PI).toFixed(1))}°`
-  return `θ ${degrees(direction.thetaRad)}, φ ${degrees(direction.phiRad)}`
+  // A line does not break between a letter and its number.
+  return `θ\u00a0${degrees(direction.thetaRad)}, φ\u00a0${degrees(direction.phiRad)}`
 }

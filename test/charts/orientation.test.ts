@@ -27,7 +27,7 @@ describe('viewing cone', () => {
     }
     // Off the spokes and the iso-lines: the disc is centered near (300, 380) with a radius near 250.
     expect(lightness(330, 190)).toBeGreaterThan(lightness(330, 560) + 40)
-    expect(config.options?.plugins?.subtitle?.text).toEqual(['worst 8.46 % at θ 60°, φ 90° (✕)'])
+    expect(config.options?.plugins?.subtitle?.text).toEqual(['worst 8.46 % at θ\u00a060°, φ\u00a090° (✕)'])
   })
 })
 

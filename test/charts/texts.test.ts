@@ -20,7 +20,7 @@ describe('numbers in charts', () => {
     expect(axisTitle(percent)).toBe('luminous reflectance (%)')
     expect(axisTitle(METRIC_QUANTITIES.chroma)).toBe('chroma C*ab')
     expect(numberText(-0.0123)).toBe('−0.0123')
-    expect(directionText({ thetaRad: Math.PI / 4, phiRad: Math.PI / 2 })).toBe('θ 45°, φ 90°')
+    expect(directionText({ thetaRad: Math.PI / 4, phiRad: Math.PI / 2 })).toBe('θ\u00a045°, φ\u00a090°')
   })
 
   it('have the decimals of their step', () => {

@@ -1,6 +1,7 @@
 import type { Stack } from '../stack/stack.js'
 import type { Fit } from '../studies/fit.js'
-import { fixed, given } from './decimals.js'
+import type { SingleFault } from '../studies/singleFaults.js'
+import { fixed } from './decimals.js'
 import { ESTIMATE_CAUTION } from './evaluateText.js'
 import { type Paint, PLAIN } from './paint.js'
 import { parameterText } from './parameterText.js'
@@ -13,7 +14,7 @@ export function fitText(stack: Stack, fit: Fit, paint: Paint = PLAIN): string {
     parametersText(stack, fit),
     remainderText(fit),
     unresolvedText(fit, paint),
-    faultsText(fit),
+    faultsText(stack, fit),
     paint.faint(ESTIMATE_CAUTION),
   ]
   return `${parts.filter((part) => part !== '').join('\n\n')}\n`
@@ -52,7 +53,7 @@ function remainderText({ residual_rms, noise, noise_is_stated }: Fit): string {
   if (!noise_is_stated) return `${remainder}; the errors above take that for the noise of a reading`
   const ratio = residual_rms / noise
   const verdict = ratio > 1.5 ? 'more than noise: the model misses something' : 'no more than noise'
-  return `${remainder}, ${given(Number(ratio.toPrecision(2)))} times the stated noise (${verdict})`
+  return `${remainder}, ${fixed(ratio, 1)} times the stated noise (${verdict})`
 }
 
 function unresolvedText({ unresolved }: Fit, paint: Paint): string {
@@ -69,19 +70,36 @@ const FAULTS: readonly Column[] = [
 
 const MOST_FAULTS = 6
 
-function faultsText({ single_faults, residual_rms }: Fit): string {
-  const rows = single_faults.slice(0, MOST_FAULTS).map(({ fault, parameters, residual_rms: left, delta_bic }) => [
-    fault,
-    Object.values(parameters)
-      .map((value) => Number(value.toPrecision(6)))
-      .join(', '),
-    fixed(100 * left, 4),
-    fixed(delta_bic, 1),
-  ])
-  const [best] = single_faults
-  const enough = best !== undefined && best.residual_rms < 1.2 * residual_rms
-  const verdict = enough
-    ? `${best.fault} alone explains the sample nearly as well as all parameters together`
-    : 'no single fault explains the sample as well as all parameters together'
-  return `${textTable(FAULTS, rows)}\n${verdict}`
+function faultsText(stack: Stack, { single_faults, residual_rms }: Fit): string {
+  const rows = single_faults
+    .slice(0, MOST_FAULTS)
+    .map((fault) => [
+      fault.fault,
+      faultValues(stack, fault),
+      fixed(100 * fault.residual_rms, 4),
+      fixed(fault.delta_bic, 1),
+    ])
+  return `${textTable(FAULTS, rows)}\n${verdict(single_faults[0], residual_rms)}`
+}
+
+function faultValues(stack: Stack, { parameters }: SingleFault): string {
+  const entries = Object.entries(parameters)
+  return entries
+    .map(([path, value]) => {
+      const { unit, shown } = parameterText(stack, path)
+      const name = entries.length > 1 ? path.slice(path.lastIndexOf('.') + 1) : ''
+      return [name, shown(value), unit].filter((part) => part !== '').join(' ')
+    })
+    .join(', ')
+}
+
+/** Residuals this many times those of all parameters together count as nearly as good. */
+const NEARLY = 1.2
+
+function verdict(best: SingleFault | undefined, residualRms: number): string {
+  if (best === undefined || best.residual_rms >= NEARLY * residualRms) {
+    return 'no single fault explains the sample as well as all parameters together'
+  }
+  if (best.fault === 'nothing') return 'the sample is as the file says'
+  return `${best.fault} alone explains the sample nearly as well as all parameters together`
 }

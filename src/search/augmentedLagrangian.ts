@@ -85,7 +85,7 @@ class Lagrangian {
     const value = this.problem.objective(x)
     const constraints = this.problem.constraints(x)
     const violation = violationOf(constraints)
-    if (Number.isFinite(value) && isBetter({ x, value, violation }, this.best)) {
+    if (Number.isFinite(value) && isBetter({ value, violation }, this.best)) {
       this.best = { x: x.slice(), value, violation }
     }
     if (this.weight === 0) this.begin(value, constraints)

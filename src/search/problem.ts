@@ -23,10 +23,17 @@ export interface Candidate {
   readonly violation: number
 }
 
+type Merit = Pick<Candidate, 'value' | 'violation'>
+
 /** Whatever its value, a point that misses a constraint never beats one that meets them all. */
-export function isBetter(a: Candidate, b: Candidate): boolean {
-  if (a.violation !== b.violation) return a.violation < b.violation
-  return a.value < b.value
+export function isBetter(a: Merit, b: Merit): boolean {
+  return byMerit(a, b) < 0
+}
+
+/** Comparator of a sort, best first. */
+export function byMerit(a: Merit, b: Merit): number {
+  if (a.violation !== b.violation) return a.violation - b.violation
+  return a.value - b.value || 0
 }
 
 export function violationOf(constraints: readonly number[]): number {

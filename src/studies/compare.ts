@@ -2,10 +2,11 @@
  * Which film to buy: every combination of the film cards in the slots of a stack, each with its angles searched for (or as
  * the file has them), ranked. Where there are many, most are ruled out by a quick search: see `compareRounds.ts`.
  */
+import { byMerit } from '../search/problem.js'
 import type { OptimizeQuestion, Stack } from '../stack/stack.js'
 import { allChoices, cardsOf, questionWithin, type Slots, slotsOf } from './candidate.js'
 import { type CompareJob, type CompareShared, compareJob, type SearchedCandidate } from './compareJob.js'
-import { inOrder, type RunJobs, searchInRounds } from './compareRounds.js'
+import { type RunJobs, searchInRounds } from './compareRounds.js'
 import { type Candidate, candidateRequests, describeCandidate } from './describeCandidate.js'
 import { axisOf, cost, defaultFront, type FrontAxis, type FrontRequest, isMetric } from './frontAxis.js'
 import type { Hooks } from './hooks.js'
@@ -64,7 +65,7 @@ export async function compare(
   const requests = candidateRequests(stack, asked.filter(isMetric))
   const candidates = rounds.found
     .flatMap((found, k) => (found === undefined ? [] : [{ found, choice: choices[k] }]))
-    .sort((a, b) => inOrder(a.found, b.found))
+    .sort((a, b) => byMerit(a.found, b.found))
     .map(({ found, choice }) => describeCandidate(stack, { slots, question, requests }, choice, found))
   const ruledOut = rounds.complete ? candidates.filter((candidate) => !candidate.searched_in_full).length : 0
   const axes = asked.map((axis) => axisOf(axis, requests))

@@ -1,6 +1,6 @@
 /** One candidate of a comparison, searched: by itself, or quickly from what others taught. */
 import { globalSearch } from '../search/globalSearch.js'
-import { type Candidate, isBetter, type SearchProblem, violationOf } from '../search/problem.js'
+import { byMerit, type Candidate, isBetter, type SearchProblem, violationOf } from '../search/problem.js'
 import { runSearchJob, searchInline } from '../search/searchJob.js'
 import { StartPoints } from '../search/startPoints.js'
 import { Space } from '../search/variables.js'
@@ -107,13 +107,16 @@ function quickSearch(
     ...designs.map((design) => space.nearest(design)),
     ...Array.from({ length: EVEN_POINTS }, (_, k) => even.point(k)),
   ]
+  // Constraints are often idle, and heeding them is dear without a gradient.
+  const { constraints: _, ...free } = coarse
   const best = promising(coarse, space, points)
-    .map((start) => polished(coarse, start))
-    .reduce((a, b) => (isBetter(b, a) ? b : a))
+    .map((start) => polished(free, start))
+    .reduce((a, b) => (isBetter(at(coarse, b.x), at(coarse, a.x)) ? b : a))
+  const heeded = at(coarse, best.x).violation > 0 ? polished(coarse, best.x) : best
+  const end = at(full, heeded.x)
   // Few wavelengths may let pass what misses a constraint on all.
-  const onAll = at(full, best.x)
-  const end = onAll.violation > 0 ? polished(full, best.x) : onAll
-  return { x: Array.from(end.x), value: end.value, violation: end.violation, designs: [] }
+  const { x, value, violation } = heeded.violation === 0 && end.violation > 0 ? polished(full, heeded.x) : end
+  return { x: Array.from(x), value, violation, designs: [] }
 }
 
 function polished(problem: SearchProblem, start: Float64Array): Candidate {
@@ -123,7 +126,7 @@ function polished(problem: SearchProblem, start: Float64Array): Candidate {
 
 /** The best of the points that lie apart from each other. */
 function promising(problem: SearchProblem, space: Space, points: readonly Float64Array[]): Float64Array[] {
-  const ranked = points.map((x) => at(problem, x)).sort((a, b) => a.violation - b.violation || a.value - b.value)
+  const ranked = points.map((x) => at(problem, x)).sort(byMerit)
   const chosen: Float64Array[] = []
   for (const { x } of ranked) {
     if (chosen.length === POLISHED) break

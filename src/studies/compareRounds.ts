@@ -10,6 +10,7 @@
  */
 import { mixBits } from '../numeric/mixBits.js'
 import { permute } from '../numeric/permute.js'
+import { byMerit, isBetter } from '../search/problem.js'
 import type { Choice } from './candidate.js'
 import type { CompareJob, SearchedCandidate } from './compareJob.js'
 
@@ -41,7 +42,7 @@ export type RunJobs = (
   to: number,
 ) => Promise<readonly (SearchedCandidate | undefined)[]>
 
-const LEAST_PILOTS = 12
+const LEAST_PILOTS = 8
 const PILOT_SHARE = 0.05
 /** Designs that one pilot teaches at most. */
 const TAUGHT = 4
@@ -122,7 +123,7 @@ function enter(
   indices.forEach((k, index) => {
     const end = ends[index]
     const known = full.get(k)
-    if (end !== undefined && (known === undefined || inOrder(end, known) < 0)) full.set(k, end)
+    if (end !== undefined && (known === undefined || isBetter(end, known))) full.set(k, end)
   })
 }
 
@@ -154,11 +155,11 @@ function openCandidates(
   keep: number,
   margin: number,
 ): number[] {
-  const reached = quick.map((end, k) => full.get(k) ?? end).sort(inOrder)
+  const reached = quick.map((end, k) => full.get(k) ?? end).sort(byMerit)
   const bar = reached[Math.min(keep, reached.length) - 1]
   const isOpen = (end: SearchedCandidate, k: number): boolean => {
     const known = full.get(k)
-    return known === undefined ? mayReach(end, bar, margin) : inOrder(end, known) < 0
+    return known === undefined ? mayReach(end, bar, margin) : isBetter(end, known)
   }
   return quick.flatMap((end, k) => (isOpen(end, k) ? [k] : []))
 }
@@ -167,9 +168,4 @@ function mayReach({ value, violation }: SearchedCandidate, bar: SearchedCandidat
   if (margin === Number.POSITIVE_INFINITY) return true
   if (violation > 0) return violation <= bar.violation
   return bar.violation > 0 || value - margin <= bar.value
-}
-
-/** Better first: what misses a constraint comes after all that does not. */
-export function inOrder(a: SearchedCandidate, b: SearchedCandidate): number {
-  return a.violation - b.violation || a.value - b.value
 }

@@ -85,7 +85,7 @@ export function fit(stack: Stack, measured: Measured, settings: FitSettings, hoo
     noise: question.noise ?? certainty.residualDeviation,
     noise_is_stated: question.noise !== undefined,
     correlation: correlationOf(paths, certainty.free, certainty.correlation),
-    unresolved: unresolvedCombinations(paths, certainty, measured.directions),
+    unresolved: unresolvedCombinations(stack, measured, question, found.x, certainty),
     single_faults: singleFaults(stack, measured, question, hooks),
     directions: fittedDirections(
       setParameters(stack, Object.fromEntries(paths.map((path, k) => [path, found.x[k]]))),

@@ -1,5 +1,10 @@
-import type { Certainty } from '../search/certainty.js'
-import type { Direction } from '../stack/stack.js'
+/** What a measurement cannot tell apart, and which further direction would. */
+import { type Certainty, certaintyOf } from '../search/certainty.js'
+import { Space } from '../search/variables.js'
+import type { MeasuredSpectrum } from '../stack/readMeasured.js'
+import type { Direction, FitQuestion, Stack } from '../stack/stack.js'
+import { degrees } from './evaluate.js'
+import { fitProblem, type Measured } from './fitProblem.js'
 
 /** Parameters the measurement cannot tell apart, in words a person at the bench can act on. */
 export interface Unresolved {
@@ -7,7 +12,11 @@ export interface Unresolved {
   /** Standard deviation along the combination, as a share of the range searched. */
   readonly deviation: number
   readonly sentence: string
+  /** A direction whose spectrum, measured as well, would tell them apart; absent where none of the usual ones would. */
+  readonly measure?: { readonly theta_deg: number; readonly phi_deg: number }
 }
+
+type Blur = Pick<Unresolved, 'parameters' | 'deviation'>
 
 /** A combination known no better than to this share of its range is called unresolved. */
 const UNRESOLVED_DEVIATION = 0.15
@@ -16,51 +25,111 @@ const STRONG_CORRELATION = 0.98
 /** Part of a combination's direction below which a parameter is not named. */
 const NAMED_SHARE = 0.25
 
+/** At the fitted parameters x (nm, rad, fractions), which are known as `certainty` says. */
 export function unresolvedCombinations(
-  paths: readonly string[],
+  stack: Stack,
+  measured: Measured,
+  question: FitQuestion,
+  x: Float64Array,
   certainty: Certainty,
-  directions: readonly Direction[],
 ): Unresolved[] {
-  const advice = adviceFor(directions)
-  const combinations = certainty.combinations
-    .filter(({ deviation }) => !(deviation < UNRESOLVED_DEVIATION))
-    .map(({ direction, deviation }) => {
-      const named = certainty.free.filter((_, k) => Math.abs(direction[k]) >= NAMED_SHARE).map((i) => paths[i])
-      return { parameters: named, deviation, sentence: `${sentence(named)}: ${advice}` }
-    })
-  return [...combinations, ...correlatedPairs(paths, certainty, combinations, advice)]
+  const paths = Object.keys(question.vary)
+  const blurs = blursOf(paths, certainty)
+  if (blurs.length === 0) return []
+  const noise = question.noise ?? certainty.residualDeviation
+  const further = bestFurther(stack, measured, { ...question, noise }, x)
+  return blurs.map((blur) => {
+    const isCured =
+      further !== undefined && !further.left.some(({ parameters }) => isWithin(blur.parameters, parameters))
+    return {
+      ...blur,
+      sentence: `${sentence(blur.parameters)}: ${isCured ? adviceFor(further.direction) : OTHERWISE}`,
+      ...(isCured && { measure: inDegrees(further.direction) }),
+    }
+  })
 }
 
-function correlatedPairs(
-  paths: readonly string[],
-  { free, correlation, combinations }: Certainty,
-  told: readonly Unresolved[],
-  advice: string,
-): Unresolved[] {
+function blursOf(paths: readonly string[], certainty: Certainty): Blur[] {
+  const combinations = certainty.combinations
+    .filter(({ deviation }) => !(deviation < UNRESOLVED_DEVIATION))
+    .map(({ direction, deviation }) => ({
+      parameters: certainty.free.filter((_, k) => Math.abs(direction[k]) >= NAMED_SHARE).map((i) => paths[i]),
+      deviation,
+    }))
+  const pairs = correlatedPairs(paths, certainty).filter(
+    ({ parameters }) => !combinations.some((told) => isWithin(parameters, told.parameters)),
+  )
+  return [...combinations, ...pairs]
+}
+
+function correlatedPairs(paths: readonly string[], { free, correlation, combinations }: Certainty): Blur[] {
   const p = free.length
-  const pairs: Unresolved[] = []
-  for (let a = 0; a < p; a++) {
-    for (let b = a + 1; b < p; b++) {
-      if (Math.abs(correlation[a * p + b]) < STRONG_CORRELATION) continue
-      const parameters = [paths[free[a]], paths[free[b]]]
-      if (told.some((other) => parameters.every((path) => other.parameters.includes(path)))) continue
-      pairs.push({ parameters, deviation: combinations[0].deviation, sentence: `${sentence(parameters)}: ${advice}` })
-    }
-  }
-  return pairs
+  return free.flatMap((_, b) =>
+    free
+      .slice(0, b)
+      .flatMap((__, a) =>
+        Math.abs(correlation[a * p + b]) < STRONG_CORRELATION
+          ? []
+          : [{ parameters: [paths[free[a]], paths[free[b]]], deviation: combinations[0].deviation }],
+      ),
+  )
+}
+
+function isWithin(some: readonly string[], all: readonly string[]): boolean {
+  return some.every((path) => all.includes(path))
+}
+
+/** Usual directions of a variable-angle spectrophotometer, degrees. */
+const USUAL_THETA_DEG = [45, 60]
+const USUAL_PHI_DEG = [0, 45, 90, 135]
+
+interface Further {
+  readonly direction: Direction
+  /** What would still not be resolved. */
+  readonly left: readonly Blur[]
+}
+
+/** The usual direction that would leave least unresolved, measured as well as those at hand; `noise` must be stated. */
+function bestFurther(stack: Stack, measured: Measured, question: FitQuestion, x: Float64Array): Further | undefined {
+  const [{ wavelengthNm }] = measured.directions
+  const trials = USUAL_THETA_DEG.flatMap((theta) => USUAL_PHI_DEG.map((phi) => [theta, phi].map(radians)))
+    .map(([theta, phi]): MeasuredSpectrum => ({ theta, phi, wavelengthNm, reflectance: wavelengthNm.map(() => 0) }))
+    .map((direction) => ({ direction, left: leftAfter(stack, measured, direction, question, x) }))
+  const worst = ({ left }: Further): number => Math.max(0, ...left.map(({ deviation }) => deviation))
+  return trials.sort((a, b) => a.left.length - b.left.length || worst(a) - worst(b))[0]
+}
+
+function leftAfter(
+  stack: Stack,
+  { directions }: Measured,
+  further: MeasuredSpectrum,
+  question: FitQuestion,
+  x: Float64Array,
+): Blur[] {
+  const problem = fitProblem(stack, { directions: [...directions, further] }, question)
+  const residuals = new Float64Array(problem.count)
+  problem.residuals(x, residuals)
+  // What is not yet measured does not press a parameter against its bound.
+  residuals.fill(0, problem.count - further.wavelengthNm.length)
+  return blursOf(Object.keys(question.vary), certaintyOf(problem, new Space(problem.variables), x, residuals))
 }
 
 function sentence(parameters: readonly string[]): string {
   if (parameters.length === 1) return `${parameters[0]} hardly changes what was measured`
-  const last = parameters[parameters.length - 1]
-  return `${parameters.slice(0, -1).join(', ')} and ${last} move together`
+  return `${parameters.slice(0, -1).join(', ')} and ${parameters[parameters.length - 1]} move together`
 }
 
-/** What would tell them apart: the direction not yet measured from. */
-function adviceFor(directions: readonly Direction[]): string {
-  const oblique = directions.filter(({ theta }) => theta > 0.17)
-  if (oblique.length === 0) return 'measure at 45 deg or more as well'
-  const azimuths = new Set(oblique.map(({ phi }) => Math.round(((phi % Math.PI) + Math.PI) * 1e3) % 3142))
-  if (azimuths.size === 1) return 'measure at a second azimuth'
-  return 'measure one of them by itself, or keep it at its nominal value'
+function adviceFor(direction: Direction): string {
+  const { theta_deg, phi_deg } = inDegrees(direction)
+  return `measure at theta ${theta_deg} deg, phi ${phi_deg} deg as well`
+}
+
+const OTHERWISE = 'measure one of them by itself, or keep it at its nominal value'
+
+function inDegrees({ theta, phi }: Direction) {
+  return { theta_deg: degrees(theta), phi_deg: degrees(phi) }
+}
+
+function radians(deg: number): number {
+  return (deg * Math.PI) / 180
 }

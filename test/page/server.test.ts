@@ -1,20 +1,24 @@
-import { mkdirSync, readdirSync, readFileSync, symlinkSync, writeFileSync } from 'node:fs'
+import { mkdtempSync, readdirSync, readFileSync, rmSync, symlinkSync, writeFileSync } from 'node:fs'
 import { request } from 'node:http'
 import { connect } from 'node:net'
+import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { startTune, type TuneProcess } from './tuneProcess.js'
 
 let tune: TuneProcess
+let outside: string
 beforeAll(async () => {
   tune = await startTune()
-  const outside = join(tune.folder, '..', `${tune.folder.split('/').at(-1)}-outside`)
-  mkdirSync(outside)
+  outside = mkdtempSync(join(tmpdir(), 'offblack-outside-'))
   writeFileSync(join(outside, 'secret.stack.yaml'), 'secret: 1\n')
   symlinkSync(join(outside, 'secret.stack.yaml'), join(tune.folder, 'link.stack.yaml'))
   symlinkSync(outside, join(tune.folder, 'linked'))
 })
-afterAll(() => tune.stop())
+afterAll(async () => {
+  await tune.stop()
+  rmSync(outside, { recursive: true })
+})
 
 interface Answer {
   readonly status: number

@@ -20,6 +20,7 @@ import { metricFaults } from './sense/metrics.js'
 import { pathFaults } from './sense/paths.js'
 import { polarizerFaults } from './sense/polarizers.js'
 import type { Sense } from './sense/sense.js'
+import { slotSpreadFaults } from './sense/slotSpreads.js'
 import { Source } from './source.js'
 import type { CompareQuestion, Layer, Stack } from './stack.js'
 import { besideFile, NO_FILES, type StackFiles } from './stackFiles.js'
@@ -83,7 +84,10 @@ class StackReader {
     this.faults.push(...faults, ...exclusiveIn(raw), ...(await senseFaults({ draft, raw })))
     const { compare: asked, ...sections } = draft
     const compare = asked && this.readCompare(asked, raw)
-    if (compare !== undefined) await this.checkCards(compare, draft)
+    if (compare !== undefined) {
+      await this.checkCards(compare, draft)
+      this.faults.push(...slotSpreadFaults(compare, { draft, raw }))
+    }
     const whole = { ...sections, ...(compare && { compare }) }
     return this.conclude(whole, { source: this.source, overrides, filmed: this.filmed })
   }

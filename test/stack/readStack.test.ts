@@ -191,6 +191,18 @@ compare: {slots: {quarter: films/*.film.yaml}, optimize: true}`
     ])
   })
 
+  it('must have the fields that a robust search varies', async () => {
+    const layer =
+      '  - {id: pol, kind: polarizer, thickness: 12 um, single_transmittance: 43 %, polarization_efficiency: 99 %}'
+    const text = (metric: string) => `${withLayers(layer)}
+compare: {slots: {pol: [pol.film.yaml]}}
+optimize: {vary: {pol.absorption_axis: [0, 90]}, minimize: {metric: ${metric}}}
+tolerance: {vary: {pol.single_transmittance: {normal: 1 %}}}`
+    expect((await stackOf(text('chroma'), { files })).compare).toBeDefined()
+    const problems = await problemsOf(text('chroma, quantile: 95 %'), { files })
+    expect(problems).toMatchObject([{ code: 'unknown_field', path: 'tolerance.vary.pol.single_transmittance' }])
+  })
+
   it('found by two patterns are one candidate', async () => {
     const text = `${withLayers(QUARTER)}\ncompare: {slots: {quarter: [films/a.film.yaml, films/*.film.yaml]}}`
     const { compare } = await stackOf(text, { files })

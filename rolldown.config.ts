@@ -23,6 +23,7 @@ const fonts: Plugin = {
 // Everything is bundled, so that `--help` loads one small file and each verb loads only what it needs.
 // Native and browser-driving packages stay outside: they carry files of their own.
 const command = defineConfig({
+  logLevel: 'warn',
   input: { offblack: 'src/cli/main.ts', worker: 'src/cli/worker.ts', library: 'src/library.ts' },
   platform: 'node',
   external: ['@napi-rs/canvas', /^playwright-core/],
@@ -41,6 +42,7 @@ const command = defineConfig({
 
 /** The script in the pages of `report`: one file that asks for nothing. */
 const reviewCharts = defineConfig({
+  logLevel: 'warn',
   input: { 'review-charts': 'src/page/reviewCharts.ts' },
   platform: 'browser',
   resolve: { extensionAlias: { '.js': ['.ts', '.js'] } },

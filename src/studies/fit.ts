@@ -74,6 +74,7 @@ export function fit(stack: Stack, measured: Measured, settings: FitSettings, hoo
   })
   hooks.progress?.(0.6)
   const { certainty } = found
+  const noise = question.noise ?? certainty.residualDeviation
   const scale = question.noise ?? 1
   const rms = (value: number) => Math.sqrt((2 * value) / problem.count) * scale
   return {
@@ -82,10 +83,10 @@ export function fit(stack: Stack, measured: Measured, settings: FitSettings, hoo
       paths.map((path, k) => [path, fittedParameter(found.x[k], certainty.standardErrors[k], nominal[k], kinds[k])]),
     ),
     residual_rms: rms(found.value),
-    noise: question.noise ?? certainty.residualDeviation,
+    noise,
     noise_is_stated: question.noise !== undefined,
     correlation: correlationOf(paths, certainty.free, certainty.correlation),
-    unresolved: unresolvedCombinations(stack, measured, question, found.x, certainty),
+    unresolved: unresolvedCombinations(stack, measured, { ...question, noise }, found.x),
     single_faults: singleFaults(stack, measured, question, hooks),
     directions: fittedDirections(
       setParameters(stack, Object.fromEntries(paths.map((path, k) => [path, found.x[k]]))),

@@ -25,19 +25,16 @@ const STRONG_CORRELATION = 0.98
 /** Part of a combination's direction below which a parameter is not named. */
 const NAMED_SHARE = 0.25
 
-/** At the fitted parameters x (nm, rad, fractions), which are known as `certainty` says. */
+/** At the fitted parameters x (nm, rad, fractions); `noise` is the standard deviation of one reading. */
 export function unresolvedCombinations(
   stack: Stack,
   measured: Measured,
-  question: FitQuestion,
+  question: FitQuestion & { readonly noise: number },
   x: Float64Array,
-  certainty: Certainty,
 ): Unresolved[] {
-  const paths = Object.keys(question.vary)
-  const blurs = blursOf(paths, certainty)
+  const blurs = blursWith(stack, measured, question, x)
   if (blurs.length === 0) return []
-  const noise = question.noise ?? certainty.residualDeviation
-  const further = bestFurther(stack, measured, { ...question, noise }, x)
+  const further = bestFurther(stack, measured, question, x)
   return blurs.map((blur) => {
     const isCured =
       further !== undefined && !further.left.some(({ parameters }) => isWithin(blur.parameters, parameters))
@@ -47,6 +44,16 @@ export function unresolvedCombinations(
       ...(isCured && { measure: inDegrees(further.direction) }),
     }
   })
+}
+
+/**
+ * The residuals are taken for zero: a parameter that the data do not see ends anywhere, even at a bound, where they would hold
+ * it by chance.
+ */
+function blursWith(stack: Stack, measured: Measured, question: FitQuestion, x: Float64Array): Blur[] {
+  const problem = fitProblem(stack, measured, question)
+  const certainty = certaintyOf(problem, new Space(problem.variables), x, new Float64Array(problem.count))
+  return blursOf(Object.keys(question.vary), certainty)
 }
 
 function blursOf(paths: readonly string[], certainty: Certainty): Blur[] {
@@ -89,29 +96,17 @@ interface Further {
   readonly left: readonly Blur[]
 }
 
-/** The usual direction that would leave least unresolved, measured as well as those at hand; `noise` must be stated. */
+/** The usual direction that would leave least unresolved, measured as well as those at hand. */
 function bestFurther(stack: Stack, measured: Measured, question: FitQuestion, x: Float64Array): Further | undefined {
   const [{ wavelengthNm }] = measured.directions
   const trials = USUAL_THETA_DEG.flatMap((theta) => USUAL_PHI_DEG.map((phi) => [theta, phi].map(radians)))
     .map(([theta, phi]): MeasuredSpectrum => ({ theta, phi, wavelengthNm, reflectance: wavelengthNm.map(() => 0) }))
-    .map((direction) => ({ direction, left: leftAfter(stack, measured, direction, question, x) }))
+    .map((direction) => ({
+      direction,
+      left: blursWith(stack, { directions: [...measured.directions, direction] }, question, x),
+    }))
   const worst = ({ left }: Further): number => Math.max(0, ...left.map(({ deviation }) => deviation))
   return trials.sort((a, b) => a.left.length - b.left.length || worst(a) - worst(b))[0]
-}
-
-function leftAfter(
-  stack: Stack,
-  { directions }: Measured,
-  further: MeasuredSpectrum,
-  question: FitQuestion,
-  x: Float64Array,
-): Blur[] {
-  const problem = fitProblem(stack, { directions: [...directions, further] }, question)
-  const residuals = new Float64Array(problem.count)
-  problem.residuals(x, residuals)
-  // What is not yet measured does not press a parameter against its bound.
-  residuals.fill(0, problem.count - further.wavelengthNm.length)
-  return blursOf(Object.keys(question.vary), certaintyOf(problem, new Space(problem.variables), x, residuals))
 }
 
 function sentence(parameters: readonly string[]): string {

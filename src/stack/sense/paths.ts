@@ -1,3 +1,4 @@
+import { SOBOL_DIMENSIONS } from '../../numeric/sobol.js'
 import { type Fault, isMapping, type PathKey, type PlacedFault, shortList, valueAt } from '../fault.js'
 import { emissionFields, type Field, layerFields, panelFields } from '../fields.js'
 import { nearestName } from '../nearestName.js'
@@ -12,9 +13,17 @@ export function pathFaults(sense: Sense): PlacedFault[] {
     const vary = valueAt(sense.raw, [question, 'vary'])
     const paths = isMapping(vary) ? Object.keys(vary) : []
     const unknown = paths.flatMap((path) => placed(pathFault(path, sense), [question, 'vary', path], true))
-    return [...unknown, ...sameFaults(paths, [question, 'vary'])]
+    return [...unknown, ...sameFaults(paths, [question, 'vary']), ...countFaults(paths, [question, 'vary'])]
   })
   return [...varied, ...togetherFaults(sense)]
+}
+
+/** The even points of searches and draws have so many coordinates. */
+function countFaults(paths: readonly string[], at: readonly PathKey[]): PlacedFault[] {
+  if (paths.length <= SOBOL_DIMENSIONS) return []
+  const message = 'too many parameters move at once'
+  const received = String(paths.length)
+  return [{ at: [...at], key: true, code: 'too_large', message, received, allowed: `at most ${SOBOL_DIMENSIONS}` }]
 }
 
 /** Endings of paths that mean the same of a layer. */

@@ -32,8 +32,6 @@ export function searchInline(problem: SearchProblem, stopped?: () => boolean): S
     const results: (SearchJobResult | undefined)[] = []
     for (const job of jobs) {
       results.push(stopped?.() ? undefined : runSearchJob(problem, job, stopped))
-      // Gives way, so that a stop can be noticed.
-      await Promise.resolve()
     }
     return results
   }

@@ -29,7 +29,7 @@ export function leadingResults<Result>(results: readonly (Result | undefined)[])
   return results.slice(0, count) as Result[]
 }
 
-/** A parallel map in the thread at hand, giving way between jobs so that a stop can be noticed. */
+/** A parallel map in the thread at hand; a stop is asked for between jobs. */
 export const mapInline: ParallelMap = async (task, shared, jobs, hooks = {}) => {
   const run = await task.prepare(shared)
   // Filled, so that what is not run is undefined and not a hole that array methods pass over.
@@ -38,7 +38,6 @@ export const mapInline: ParallelMap = async (task, shared, jobs, hooks = {}) => 
     if (hooks.stopped?.()) break
     results[k] = await run(jobs[k])
     hooks.progress?.((k + 1) / jobs.length)
-    await Promise.resolve()
   }
   return results
 }

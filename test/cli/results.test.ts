@@ -70,10 +70,14 @@ describe('optimize', () => {
   })
 
   test('Ctrl-C keeps the best so far, writes it, and exits with 130', async () => {
-    const slow = SMALL_STACK.replace('step: 20 nm', 'step: 1 nm').replace(
-      'views: [{theta: 0 deg, phi: 0 deg, weight: 1}]',
-      `views: [${[0, 20, 40, 60].map((t) => `{theta: ${t} deg, phi: 20 deg, weight: 1}`).join(', ')}]`,
-    )
+    const more = ['polarizer.absorption_axis: {from: 0 deg, to: 180 deg}', 'quarter.nz: {from: -2, to: 3}']
+    const ratios = ['re450', 're650'].map((ratio) => `quarter.dispersion.${ratio}: {from: 0.6, to: 1.4}`)
+    const slow = SMALL_STACK.replace('step: 20 nm', 'step: 0.5 nm')
+      .replace('  minimize:', `${[...more, ...ratios].map((line) => `    ${line}\n`).join('')}  minimize:`)
+      .replace(
+        'views: [{theta: 0 deg, phi: 0 deg, weight: 1}]',
+        `views: [${[0, 20, 40, 60].map((t) => `{theta: ${t} deg, phi: 20 deg, weight: 1}`).join(', ')}]`,
+      )
     const folder = folderWithStack(slow)
     const child = startOffblack(['optimize', FILE, '--out', 'out', '--json', '--workers', '2'], folder)
     const ended = outcomeOf(child)

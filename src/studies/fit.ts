@@ -5,12 +5,15 @@
 import { createSpectrumExperiment } from '../appearance/spectrumExperiment.js'
 import { fitFromStarts, type StartsResult } from '../search/fitFromStarts.js'
 import { findParameter, getParameter, setParameters } from '../stack/parameters.js'
-import type { Stack } from '../stack/stack.js'
+import type { FitQuestion, Stack } from '../stack/stack.js'
 import { type QuantityKind, toPlain } from '../units/quantity.js'
 import { degrees } from './evaluate.js'
 import { fitProblem, type Measured } from './fitProblem.js'
 import type { Hooks } from './hooks.js'
+import { mapInline, type ParallelMap, type Task } from './parallel.js'
+import { prepareStack } from './prepareStack.js'
 import { type SingleFault, singleFaults } from './singleFaults.js'
+import { stageHooks } from './stageHooks.js'
 import { type Unresolved, unresolvedCombinations } from './unresolved.js'
 
 export interface FitSettings {
@@ -58,21 +61,43 @@ export interface FittedDirection {
   readonly model: readonly number[]
 }
 
+interface Shared {
+  readonly stack: Stack
+  readonly question: FitQuestion
+  readonly measured: Measured
+}
+
+type StartsSettings = FitSettings & { readonly maxEvaluations?: number }
+
+/** The fit of all parameters, from every start. */
+export const fitParameters: Task<Shared, StartsSettings, StartsResult> = {
+  name: 'fitParameters',
+  prepare: async ({ stack, question, measured }) => {
+    await prepareStack(stack)
+    const start = Object.keys(question.vary).map((path) => getParameter(stack, path))
+    return (settings) => fitFromStarts(fitProblem(stack, measured, question), { start, ...settings })
+  },
+}
+
 /** The stack must ask the question: `stack.fit` present. */
-export function fit(stack: Stack, measured: Measured, settings: FitSettings, hooks: Hooks = {}): Fit {
+export async function fit(
+  stack: Stack,
+  measured: Measured,
+  settings: FitSettings,
+  hooks: Hooks = {},
+  map: ParallelMap = mapInline,
+): Promise<Fit> {
   const question = stack.fit
   if (question === undefined) throw new Error('the stack has no fit question')
   const paths = Object.keys(question.vary)
   const kinds = paths.map((path) => findParameter(stack, path)?.kind ?? 'number')
   const problem = fitProblem(stack, measured, question)
   const nominal = paths.map((path) => getParameter(stack, path))
-  const found = fitFromStarts(problem, {
-    start: nominal,
-    seed: settings.seed,
-    starts: settings.starts,
-    stopped: hooks.stopped,
-  })
-  hooks.progress?.(0.6)
+  const shared = { stack, question, measured }
+  const [fitted] = await map(fitParameters, shared, [settings], stageHooks(hooks, 0, 0.5))
+  // Stopped before it began: the file's values are what there is.
+  const found = fitted ?? (await asTheFileSays(shared))
+  const faults = await singleFaults(stack, measured, question, stageHooks(hooks, 0.5, 1), map)
   const { certainty } = found
   const noise = question.noise ?? certainty.residualDeviation
   const scale = question.noise ?? 1
@@ -87,7 +112,7 @@ export function fit(stack: Stack, measured: Measured, settings: FitSettings, hoo
     noise_is_stated: question.noise !== undefined,
     correlation: correlationOf(paths, certainty.free, certainty.correlation),
     unresolved: unresolvedCombinations(stack, measured, { ...question, noise }, found.x),
-    single_faults: singleFaults(stack, measured, question, hooks),
+    single_faults: faults,
     directions: fittedDirections(
       setParameters(stack, Object.fromEntries(paths.map((path, k) => [path, found.x[k]]))),
       measured,
@@ -98,8 +123,13 @@ export function fit(stack: Stack, measured: Measured, settings: FitSettings, hoo
     })),
     evaluations: found.evaluations,
     reason: found.reason,
-    interrupted: found.reason === 'stopped',
+    interrupted: hooks.stopped?.() === true,
   }
+}
+
+async function asTheFileSays(shared: Shared): Promise<StartsResult> {
+  const run = await fitParameters.prepare(shared)
+  return run({ seed: 1, starts: 0, maxEvaluations: 1 })
 }
 
 function fittedParameter(value: number, error: number, nominal: number, kind: QuantityKind): FittedParameter {

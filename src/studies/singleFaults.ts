@@ -4,6 +4,8 @@ import type { FitQuestion, Range, Stack } from '../stack/stack.js'
 import { toPlain } from '../units/quantity.js'
 import { fitProblem, type Measured } from './fitProblem.js'
 import type { Hooks } from './hooks.js'
+import { leadingResults, type ParallelMap, type Task } from './parallel.js'
+import { prepareStack } from './prepareStack.js'
 
 /** One thing that may have gone wrong, everything else as the file has it. */
 export interface SingleFault {
@@ -36,15 +38,37 @@ function around(reach: number): (value: number) => Range {
   return (value) => ({ from: value - reach, to: value + reach })
 }
 
+type ScoredFault = Omit<SingleFault, 'delta_bic'> & { readonly bic: number }
+
+interface Candidate {
+  readonly fault: string
+  readonly vary: Readonly<Record<string, Range>>
+}
+
+interface Shared {
+  readonly stack: Stack
+  readonly measured: Measured
+  readonly noise?: number
+}
+
+export const fitSingleFault: Task<Shared, Candidate, ScoredFault> = {
+  name: 'fitSingleFault',
+  prepare: async ({ stack, measured, noise }) => {
+    await prepareStack(stack)
+    return ({ fault, vary }) => ({ fault, ...fitFault(stack, measured, { vary, noise }) })
+  },
+}
+
 /** Best first; `nothing` among them. */
-export function singleFaults(stack: Stack, measured: Measured, { noise }: FitQuestion, hooks: Hooks): SingleFault[] {
+export async function singleFaults(
+  stack: Stack,
+  measured: Measured,
+  { noise }: FitQuestion,
+  hooks: Hooks,
+  map: ParallelMap,
+): Promise<SingleFault[]> {
   const candidates = [{ fault: 'nothing', vary: {} }, ...faultsOf(stack)]
-  const fits: (SingleFault & { readonly bic: number })[] = []
-  candidates.forEach(({ fault, vary }, index) => {
-    if (hooks.stopped?.() === true) return
-    fits.push({ fault, ...fitFault(stack, measured, { vary, noise }), delta_bic: 0 })
-    hooks.progress?.(0.6 + (0.4 * (index + 1)) / candidates.length)
-  })
+  const fits = leadingResults(await map(fitSingleFault, { stack, measured, noise }, candidates, hooks))
   const best = Math.min(...fits.map(({ bic }) => bic))
   return fits
     .map(({ bic, ...fault }) => ({ ...fault, delta_bic: bic - best }))
@@ -75,7 +99,7 @@ function atNominal(problem: ReturnType<typeof fitProblem>) {
 }
 
 /** Angle, retardance and dispersion of each film, and the panel. */
-function faultsOf(stack: Stack): { fault: string; vary: Record<string, Range> }[] {
+function faultsOf(stack: Stack): Candidate[] {
   const parameters = parameterPaths(stack).filter(({ path }) => fieldOf(path) in REACH && !isIdleFilm(stack, path))
   const groups = new Map<string, Record<string, Range>>()
   for (const { path, value } of parameters) {

@@ -32,16 +32,16 @@ const CLEAN = measure(SAMPLE, SIX_DIRECTIONS)
 
 const normalFrom = (seed: number) => boxMuller(lehmer(seed))
 
-function fitted(directions: readonly DirectionDeg[], vary = FOUR_PARAMETERS): Fit {
+async function fitted(directions: readonly DirectionDeg[], vary = FOUR_PARAMETERS): Promise<Fit> {
   const measured = { directions: noisy(measure(SAMPLE, directions), NOISE, normalFrom(3)) }
   return fit(asking(laminate(), { vary, noise: NOISE }), measured, { seed: 1, starts: 3 })
 }
 
-describe('six noisy directions of a sample made by the slow solver', () => {
+describe('six noisy directions of a sample made by the slow solver', async () => {
   const measured = { directions: noisy(CLEAN, NOISE, normalFrom(11)) }
 
-  it('give back angles and retardances within their own errors', () => {
-    const found = fit(asking(laminate(), { vary: FOUR_PARAMETERS, noise: NOISE }), measured, { seed: 1 })
+  it('give back angles and retardances within their own errors', async () => {
+    const found = await fit(asking(laminate(), { vary: FOUR_PARAMETERS, noise: NOISE }), measured, { seed: 1 })
     for (const [path, { value, std_error }] of Object.entries(found.parameters)) {
       expect(Math.abs(value - TRUTH[path]), path).toBeLessThan(3 * (std_error ?? 0))
       // Fit to decide on: a tenth of a degree, half a nanometer.
@@ -54,9 +54,12 @@ describe('six noisy directions of a sample made by the slow solver', () => {
     expect(found.reason).toBe('converged')
   })
 
-  it('tell their noise where the file does not', () => {
-    const stated = fit(asking(laminate(), { vary: FOUR_PARAMETERS, noise: NOISE }), measured, { seed: 1, starts: 1 })
-    const estimated = fit(asking(laminate(), { vary: FOUR_PARAMETERS }), measured, { seed: 1, starts: 1 })
+  it('tell their noise where the file does not', async () => {
+    const stated = await fit(asking(laminate(), { vary: FOUR_PARAMETERS, noise: NOISE }), measured, {
+      seed: 1,
+      starts: 1,
+    })
+    const estimated = await fit(asking(laminate(), { vary: FOUR_PARAMETERS }), measured, { seed: 1, starts: 1 })
     expect(estimated.noise_is_stated).toBe(false)
     expect(estimated.noise).toBeCloseTo(Math.sqrt(66 / 62) * estimated.residual_rms, 9)
     for (const [path, { value, std_error }] of Object.entries(estimated.parameters)) {
@@ -95,11 +98,11 @@ describe('a hundred repetitions of the noise', () => {
   })
 })
 
-describe('what the measurement cannot tell apart', () => {
+describe('what the measurement cannot tell apart', async () => {
   const HALF_AND_QUARTER_TURNED = { ...FOUR_PARAMETERS, 'polarizer.absorption_axis': { from: 80 * DEG, to: 100 * DEG } }
 
-  it('is named in words: seen head-on, all axes turn as one', () => {
-    const { unresolved } = fitted([[0, 0]], HALF_AND_QUARTER_TURNED)
+  it('is named in words: seen head-on, all axes turn as one', async () => {
+    const { unresolved } = await fitted([[0, 0]], HALF_AND_QUARTER_TURNED)
     expect(unresolved.length).toBeGreaterThan(0)
     const [first] = unresolved
     expect(first.parameters).toEqual(expect.arrayContaining(['half.slow_axis', 'quarter.slow_axis']))
@@ -117,12 +120,12 @@ describe('what the measurement cannot tell apart', () => {
       ],
       { ...HALF_AND_QUARTER_TURNED, 'half.nz': { from: 0.5, to: 2 } },
     ],
-  ])('is told apart by the direction advised: %s', (_, directions, vary) => {
-    const before = fitted(directions, vary)
+  ])('is told apart by the direction advised: %s', async (_, directions, vary) => {
+    const before = await fitted(directions, vary)
     const advised = before.unresolved.flatMap(({ measure }) => (measure === undefined ? [] : [measure]))
     expect(advised.length).toBeGreaterThan(0)
     const [{ theta_deg, phi_deg }] = advised
-    const after = fitted([...directions, [theta_deg, phi_deg]], vary)
+    const after = await fitted([...directions, [theta_deg, phi_deg]], vary)
     const cured = before.unresolved.filter(({ measure }) => measure !== undefined)
     for (const { parameters } of cured) {
       const still = after.unresolved.filter((other) => parameters.every((path) => other.parameters.includes(path)))
@@ -130,7 +133,7 @@ describe('what the measurement cannot tell apart', () => {
     }
   })
 
-  it('is not promised a cure where no direction has one', () => {
+  it('is not promised a cure where no direction has one', async () => {
     // Reflectance and depolarized share of a panel without films above differ in nothing that is seen.
     const bare = laminate({ half: { retardance: 0 }, quarter: { retardance: 0 } })
     const stack = asking(
@@ -141,14 +144,14 @@ describe('what the measurement cannot tell apart', () => {
       },
     )
     const measured = { directions: measure(stack, SIX_DIRECTIONS) }
-    const { unresolved } = fit(stack, measured, { seed: 1, starts: 1 })
+    const { unresolved } = await fit(stack, measured, { seed: 1, starts: 1 })
     expect(unresolved.map(({ parameters }) => parameters)).toEqual([['panel.depolarized']])
     expect(unresolved[0].measure).toBeUndefined()
     expect(unresolved[0].sentence).toMatch(/^panel.depolarized hardly changes what was measured: measure one of them/)
   })
 })
 
-describe('a single fault', () => {
+describe('a single fault', async () => {
   const dispersion = (re450: number, re650: number) => ({ dispersion: { re450, re650 } })
 
   it.each<[string, Readonly<Record<string, Partial<RetarderLayer>>>, object]>([
@@ -161,21 +164,21 @@ describe('a single fault', () => {
     ['panel.reflectance', {}, { reflectance: 0.52 }],
     ['panel.depolarized', {}, { depolarized: 0.025 }],
     ['nothing', {}, {}],
-  ])('planted in %s is named first', (planted, changes, panel) => {
+  ])('planted in %s is named first', async (planted, changes, panel) => {
     const measured = { directions: noisy(measure(laminate(changes, panel), SIX_DIRECTIONS), NOISE, normalFrom(7)) }
     const stack = asking(laminate(), { vary: { 'half.slow_axis': FOUR_PARAMETERS['half.slow_axis'] }, noise: NOISE })
-    const { single_faults } = fit(stack, measured, { seed: 1, starts: 0 })
+    const { single_faults } = await fit(stack, measured, { seed: 1, starts: 0 })
     expect(single_faults[0].fault).toBe(planted)
     expect(single_faults[0].delta_bic).toBe(0)
     // Kass and Raftery 1995: a difference above 10 is very strong evidence; each parameter that is not needed costs ln 66 = 4.2.
     expect(single_faults[1].delta_bic).toBeGreaterThan(planted === 'nothing' ? 0 : 10)
   })
 
-  it('has the criterion of its definition', () => {
+  it('has the criterion of its definition', async () => {
     const measured = { directions: noisy(CLEAN, NOISE, normalFrom(7)) }
     const vary = { 'half.slow_axis': FOUR_PARAMETERS['half.slow_axis'] }
     for (const noise of [NOISE, undefined]) {
-      const { single_faults } = fit(asking(laminate(), { vary, ...(noise && { noise }) }), measured, {
+      const { single_faults } = await fit(asking(laminate(), { vary, ...(noise && { noise }) }), measured, {
         seed: 1,
         starts: 0,
       })
@@ -191,8 +194,8 @@ describe('a single fault', () => {
   })
 })
 
-it('says null for the error of a parameter that the data hold at its bound', () => {
-  const { parameters } = fitted(SIX_DIRECTIONS, {
+it('says null for the error of a parameter that the data hold at its bound', async () => {
+  const { parameters } = await fitted(SIX_DIRECTIONS, {
     ...FOUR_PARAMETERS,
     'quarter.slow_axis': { from: 85 * DEG, to: 90 * DEG },
   })
@@ -201,10 +204,10 @@ it('says null for the error of a parameter that the data hold at its bound', () 
   expect(parameters['half.slow_axis'].std_error).toBeGreaterThan(0)
 })
 
-it('keeps the best so far when stopped', () => {
+it('keeps the best so far when stopped', async () => {
   let polled = 0
   const stack = asking(laminate(), { vary: FOUR_PARAMETERS, noise: NOISE })
-  const found = fit(stack, { directions: CLEAN }, { seed: 1 }, { stopped: () => ++polled > 2 })
+  const found = await fit(stack, { directions: CLEAN }, { seed: 1 }, { stopped: () => ++polled > 2 })
   expect(found.interrupted).toBe(true)
   expect(Object.keys(found.parameters)).toEqual(Object.keys(FOUR_PARAMETERS))
 })

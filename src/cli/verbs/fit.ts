@@ -25,8 +25,8 @@ export async function run(context: Context<FitOptions>): Promise<ExitCode> {
   requireQuestion(stack, 'fit', file)
   const directions = readMeasured(readText(options.measured), options.measured)
   if (options.out !== undefined) await checkFolder(options.out)
-  const found = await runStudy(context, 'fit', async (hooks) =>
-    fit(stack, { directions }, { seed: options.seed }, hooks),
+  const found = await runStudy(context, 'fit', (hooks, map) =>
+    fit(stack, { directions }, { seed: options.seed }, hooks, map),
   )
   const json = jsonText(found)
   terminal.print(options.json ? json : fitText(stack, found, terminal.paint))

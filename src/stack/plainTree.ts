@@ -7,6 +7,7 @@ const DEEPEST = 40
 
 /** Bounds on plain data before any schema walks it: how deep, how much, and no key that JavaScript treats apart. */
 export function treeFaults(raw: unknown): PlacedFault[] {
+  if (raw === null || raw === undefined) return [{ at: [], ...emptyFile() }]
   const pending: { value: unknown; at: readonly PathKey[] }[] = [{ value: raw, at: [] }]
   const faults: PlacedFault[] = []
   let count = 0
@@ -22,6 +23,14 @@ export function treeFaults(raw: unknown): PlacedFault[] {
     }
   }
   return faults
+}
+
+function emptyFile(): Omit<PlacedFault, 'at'> {
+  return {
+    code: 'wrong_type',
+    message: 'the file is empty, or all of it is comment',
+    next: 'check the name; offblack new starts a stack file, with comments',
+  }
 }
 
 function tooManyValues(): Omit<PlacedFault, 'at'> {

@@ -27,8 +27,7 @@ export class Source {
     const document = parseDocument(bounded, { lineCounter: lines, prettyErrors: false })
     const source = new Source(file, bounded, document, lines)
     if (bounded !== text) return { source, problems: [source.problem(tooLong(text.length), [])] }
-    const faults = [...document.errors, ...document.warnings]
-    return { source, problems: faults.map((fault) => source.yamlProblem(fault)) }
+    return { source, problems: withoutSequels(document).map((fault) => source.yamlProblem(fault)) }
   }
 
   /** The text as plain data. Own keys only, so that `__proto__` is a key like any other. */
@@ -76,6 +75,11 @@ export class Source {
     return { line: from.line, column: from.col, endLine: to.line, endColumn: to.col }
   }
 
+  private isIndentedWithTab(at: number): boolean {
+    const lineStart = this.text.lastIndexOf('\n', at - 1) + 1
+    return /^ *\t/.test(this.text.slice(lineStart, lineStart + 200))
+  }
+
   private yamlProblem({ code, message, pos }: { code: string; message: string; pos: [number, number] }): Problem {
     if (message.includes('call stack')) return this.problem(depthFault(), [])
     return {
@@ -85,9 +89,17 @@ export class Source {
       file: this.file,
       range: this.textRange(pos[0], pos[1]),
       message: sentenceOf(code, message),
-      next: NEXT_STEPS[code] ?? 'correct the YAML here; all other checks wait for it',
+      next: this.isIndentedWithTab(pos[0]) ? NEXT_STEPS.TAB_AS_INDENT : (NEXT_STEPS[code] ?? CORRECT_HERE),
     }
   }
+}
+
+type YamlFault = Document['errors'][number] | Document['warnings'][number]
+
+/** After a fault of syntax the parser has lost its place, and what it finds from there on is mostly a sequel. */
+function withoutSequels({ errors, warnings }: Document): YamlFault[] {
+  const first = errors.findIndex(({ code }) => code !== 'DUPLICATE_KEY')
+  return first < 0 ? [...errors, ...warnings] : errors.slice(0, first + 1)
 }
 
 /** The pair of a mapping or the item of a list. */
@@ -97,9 +109,11 @@ export function childOf(node: unknown, step: PathKey): Node | Pair | undefined {
   return undefined
 }
 
+const CORRECT_HERE = 'correct the YAML here; all other checks wait for it'
+
 const NEXT_STEPS: Readonly<Record<string, string>> = {
   DUPLICATE_KEY: 'keep one of the two',
-  TAB_AS_INDENT: 'indent with spaces',
+  TAB_AS_INDENT: 'indent with spaces, not with a tab',
   TAG_RESOLVE_FAILED: 'leave the tag out: the stack file knows its types',
 }
 

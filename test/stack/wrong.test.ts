@@ -41,6 +41,7 @@ const WRONG: readonly (readonly [file: string, code: string, line: number, sugge
   ['prototype-key', 'unknown_key', 8],
   ['quantile-without-spreads', 'missing_key', 8],
   ['reserved-id', 'reserved_id', 4, 'panel_layer'],
+  ['tab-in-layer', 'yaml', 5],
   ['tab-indent', 'yaml', 4],
   ['together-not-varied', 'unknown_id', 11, 'quarter.slow_axis'],
   ['too-many-wavelengths', 'too_large', 4],

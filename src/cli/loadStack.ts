@@ -40,7 +40,7 @@ export function requireQuestion<Key extends 'optimize' | 'tolerance' | 'compare'
       path: key,
       file,
       message: `the file has no section "${key}", which is what this verb answers`,
-      next: `add a section "${key}"; offblack schema tells its fields, offblack new writes an example`,
+      next: `add a section "${key}"; offblack schema tells its fields, stacks/dive-computer.stack.yaml has one`,
     },
   ])
 }

@@ -18,7 +18,7 @@ export function readText(path: string): string {
     throw inputError(path, {
       code: 'not_text',
       message: 'the file is not UTF-8 text',
-      received: 'bytes of value 0',
+      received: 'a zero byte, which no text holds',
       next,
     })
   }

@@ -36,7 +36,7 @@ function ringsTable(cone: Cone): string {
     { heading: 'least', of: (row) => shown(Math.min(...reflectance[row])) },
     { heading: 'mean', of: (row) => shown(meanOf(reflectance[row])) },
     { heading: 'most', of: (row) => shown(mostOf(reflectance, row)) },
-    { heading: 'at φ', of: (row) => `${given(cone.phi_deg[reflectance[row].indexOf(mostOf(reflectance, row))])}°` },
+    { heading: 'at φ', of: (row) => azimuthOfMost(cone, row) },
     { heading: 'C*ab', of: (row) => metricNumber('chroma', mostOf(cone.chroma, row)) },
     { heading: 'ΔE00', of: (row) => fixed(mostOf(cone.delta_e00, row), 2) },
     ...emissionRings(cone),
@@ -46,6 +46,18 @@ function ringsTable(cone: Cone): string {
     columns,
     cone.theta_deg.map((_, row) => rings.map(({ of }) => of(row))),
   )
+}
+
+/** Nothing head-on, where every azimuth is the same direction. */
+function azimuthOfMost({ theta_deg, phi_deg, luminous_reflectance }: Cone, row: number): string {
+  if (theta_deg[row] === 0) return '–'
+  const reflectance = luminous_reflectance[row]
+  return azimuth(phi_deg[reflectance.indexOf(Math.max(...reflectance))])
+}
+
+/** To a tenth of a degree: a step that does not divide the circle gives endless decimals. */
+function azimuth(degrees: number): string {
+  return `${given(Math.round(10 * degrees) / 10)}°`
 }
 
 function emissionRings({ emission_transmittance, ambient_contrast }: Cone): Ring[] {
@@ -68,7 +80,7 @@ function summaryText({ summary, interrupted }: Cone, paint: Paint): string {
   const { worst, diffuse_reflectance, half_turn_symmetry } = summary
   const reflectance = (value: number): string => metricWithUnit('luminous_reflectance', value)
   const lines = [
-    `worst: ${reflectance(worst.luminous_reflectance)} at θ ${given(worst.theta_deg)}° φ ${given(worst.phi_deg)}°`,
+    `worst: ${reflectance(worst.luminous_reflectance)} at θ ${given(worst.theta_deg)}° φ ${azimuth(worst.phi_deg)}`,
     ...limitLines(summary, paint),
     `under uniform diffuse light: ${reflectance(diffuse_reflectance)} ${METRIC_QUANTITIES.luminous_reflectance.label}`,
     half_turn_symmetry

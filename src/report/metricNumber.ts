@@ -23,5 +23,5 @@ export function metricWithUnit(metric: MetricName, value: number): string {
 /** Three significant digits; large contrasts as whole numbers. */
 function contrastNumber(ratio: number): string {
   if (!Number.isFinite(ratio)) return 'infinite'
-  return ratio >= 1000 ? String(Math.round(ratio)) : String(Number(ratio.toPrecision(3)))
+  return ratio >= 999.5 ? String(Math.round(ratio)) : ratio.toPrecision(3)
 }

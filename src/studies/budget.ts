@@ -39,12 +39,13 @@ interface BudgetTerm {
 }
 
 export const BUDGET_MEANING =
-  '"alone" is what a single imperfection adds to an otherwise ideal stack seen from the same direction; "if_removed" is how ' +
-  'much darker the whole stack would be without it. The parts alone, the ideal stack and the rest add up to the total; the ' +
-  'rest arises where several act together. Ideal means: a front that reflects nothing; every layer behind the front of one ' +
-  'index; a polarizer that passes nothing along its absorption axis; films of the retardances (retardance_550) and axes ' +
-  '(axis_error) of the nearest design that makes circular light at 550 nm head-on; Re proportional to the wavelength ' +
-  '(dispersion: a film of constant Re counts as an imperfection too); no depolarized share; head-on instead of oblique.'
+  '"alone" is what a single imperfection adds to an otherwise ideal stack seen from the same direction; "gained if removed" ' +
+  '(if_removed) is how much darker the whole stack would be without it. Negative: it makes up for another. The parts alone, ' +
+  'the ideal stack and the rest add up to the total; the rest arises where several act together. Ideal means: a front that ' +
+  'reflects nothing; every layer behind the front of one index; a polarizer that passes nothing along its absorption axis; ' +
+  'films of the retardances (retardance_550) and axes (axis_error) of the nearest design that makes circular light at 550 nm ' +
+  'head-on; Re proportional to the wavelength (dispersion: a film of constant Re counts as an imperfection too); no ' +
+  'depolarized share; head-on instead of oblique.'
 
 export function budget(stack: Stack, direction: Direction): Budget {
   const { missing, reflectance } = createReflectance(stack, direction)

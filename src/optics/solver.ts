@@ -50,10 +50,10 @@ export class Solver {
   private readonly above: Above
   /** Highest packet that changed in the call before. */
   private highestBefore = -1
-  private structure = ''
   private stokes: EmissionStokes = UNPOLARIZED
   private panelXi = Number.NaN
-  private layers: readonly OpticalLayer[] = []
+  /** Of the last call. */
+  private layers: OpticalLayer[] = []
   private phiRad = 0
   private thetaRad = Number.NaN
   private xi = 0
@@ -99,9 +99,9 @@ export class Solver {
     this.updateSlot(0, this.air, 0, 0, 0, xi)
     for (let k = 0; k < layers.length; k++) {
       const layer = layers[k]
+      this.layers[k] = layer
       this.updateSlot(k + 1, layer.medium, layer.azimuthRad - phiRad, layer.tiltRad, layer.thicknessNm, xi)
     }
-    this.layers = layers.slice()
     const panelChanged = this.updatePanel(layers.length + 1, panel, xi, stokes)
     let lowest = panelChanged ? 0 : Number.POSITIVE_INFINITY
     let highest = -1
@@ -176,8 +176,7 @@ export class Solver {
   }
 
   /** cos θ in air over m cos θm in the immersion medium: from tangential fields to flux. */
-  fluxFactor(i: number): number {
-    const panel = this.panel
+  fluxFactor(i: number, panel = this.panel): number {
     if (panel === undefined || panel.kind !== 'mirror') return Number.NaN
     const m2 = panel.index[i] * panel.index[i]
     return this.cosTheta / Math.sqrt(m2 - this.xi * this.xi)
@@ -185,10 +184,8 @@ export class Solver {
 
   /** Lays out slots, packets and levels anew where layers came, went, or changed between coherent and thick. */
   private arrange(layers: readonly OpticalLayer[], panel: PanelEnd): void {
-    let structure: string = panel.kind
-    for (const layer of layers) structure += layer.coherent ? 'c' : 't'
-    if (structure === this.structure) return
-    this.structure = structure
+    if (this.isArrangedFor(layers, panel)) return
+    this.layers = layers.slice()
     const n = this.wavelengthsNm.length
     const end = layers.length + 1
     this.slots = Array.from({ length: end + 1 }, () => createSlot(n))
@@ -208,6 +205,12 @@ export class Solver {
     this.panel = undefined
   }
 
+  private isArrangedFor(layers: readonly OpticalLayer[], panel: PanelEnd): boolean {
+    if (this.panel?.kind !== panel.kind || this.layers.length !== layers.length) return false
+    for (let k = 0; k < layers.length; k++) if (layers[k].coherent !== this.layers[k].coherent) return false
+    return true
+  }
+
   private updateSlot(
     k: number,
     medium: Medium,
@@ -221,11 +224,7 @@ export class Solver {
 
   /** The medium at the end and what it sends back; true where that changed. */
   private updatePanel(k: number, panel: PanelEnd, xi: number, stokes: EmissionStokes): boolean {
-    const same =
-      this.panel === panel &&
-      this.panelXi === xi &&
-      this.stokes.every((component, index) => component === stokes[index])
-    if (same) {
+    if (this.panel === panel && this.panelXi === xi && sameState(this.stokes, stokes)) {
       this.slots[k].changed = false
       return false
     }
@@ -313,4 +312,8 @@ export class Solver {
       this.frontReflectance[i] = (power(0, i) + power(6, i) + power(2, i) / c2 + power(4, i) * c2) / 2
     }
   }
+}
+
+function sameState(a: EmissionStokes, b: EmissionStokes): boolean {
+  return a[0] === b[0] && a[1] === b[1] && a[2] === b[2] && a[3] === b[3]
 }

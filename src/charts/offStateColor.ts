@@ -33,7 +33,10 @@ export function offStateColor(data: OffStateColorData, theme: Theme): ChartConfi
   return {
     type: 'scatter',
     data: {
-      datasets: [series('after', after, 0, false), ...(before.length > 0 ? [series('before', before, 1, true)] : [])],
+      datasets: [
+        series(before.length > 0 ? 'after' : 'design', after, 0, false),
+        ...(before.length > 0 ? [series('before', before, 1, true)] : []),
+      ],
     },
     options: {
       ...frameOptions(theme, {

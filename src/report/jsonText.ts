@@ -7,6 +7,7 @@ const INDENT = '  '
 
 function format(value: unknown, margin: string): string {
   if (typeof value !== 'object' || value === null) return JSON.stringify(value) ?? 'null'
+  if (Array.isArray(value) && value.every(isPlain)) return JSON.stringify(value)
   const inner = margin + INDENT
   const [open, close] = Array.isArray(value) ? '[]' : '{}'
   const parts = Array.isArray(value)
@@ -15,7 +16,6 @@ function format(value: unknown, margin: string): string {
         .filter(([, item]) => item !== undefined)
         .map(([key, item]) => `${JSON.stringify(key)}: ${format(item, inner)}`)
   if (parts.length === 0) return open + close
-  if (Array.isArray(value) && value.every(isPlain)) return `[${parts.join(', ')}]`
   return `${open}\n${parts.map((part) => inner + part).join(',\n')}\n${margin}${close}`
 }
 

@@ -3,7 +3,7 @@ import { Scene } from '../appearance/scene.js'
 import { ciede2000 } from '../color/ciede2000.js'
 import { chroma } from '../color/cielab.js'
 import type { Stack } from '../stack/stack.js'
-import { type ConeSummary, summarizeCone } from './coneSummary.js'
+import { type ConeSummary, diffuseReflectance, summarizeCone } from './coneSummary.js'
 import { degrees } from './evaluate.js'
 import type { Hooks } from './hooks.js'
 import { leadingResults, mapInline, type ParallelMap, type Task } from './parallel.js'
@@ -79,6 +79,15 @@ export const coneRow: Task<Shared, number, Row> = {
   },
 }
 
+/** The diffuse average, beside the rows: it looks from directions of its own. */
+export const diffuseAverage: Task<{ readonly stack: Stack }, null, number> = {
+  name: 'diffuseAverage',
+  prepare: async ({ stack }) => {
+    await prepareStack(stack)
+    return () => diffuseReflectance(stack)
+  },
+}
+
 export async function cone(
   stack: Stack,
   question: ConeQuestion,
@@ -90,7 +99,11 @@ export async function cone(
   const half = phis.length % 2 === 0 && hasHalfTurnSymmetry(stack, question.thetaMax)
   const computed = half ? phis.slice(0, phis.length / 2) : phis
   const shared = { stack, phis: computed }
-  const rings = leadingResults(await map(coneRow, shared, thetas, hooks))
+  const [asked, [diffuse]] = await Promise.all([
+    map(coneRow, shared, thetas, hooks),
+    map(diffuseAverage, { stack }, [null], { stopped: hooks.stopped }),
+  ])
+  const rings = leadingResults(asked)
   // Head-on there is always something to tell, however early the study was stopped.
   const done = rings.length > 0 ? rings : leadingResults(await mapInline(coneRow, shared, thetas.slice(0, 1)))
   const tables = tablesOf(stack, done, half ? 2 : 1)
@@ -100,7 +113,7 @@ export async function cone(
     theta_deg: thetas.slice(0, done.length).map(degrees),
     phi_deg: phis.map(degrees),
     ...tables,
-    summary: { ...summary, half_turn_symmetry: half },
+    summary: { ...summary, diffuse_reflectance: diffuse ?? diffuseReflectance(stack), half_turn_symmetry: half },
     interrupted: done.length < thetas.length,
   }
 }

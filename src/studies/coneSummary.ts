@@ -29,11 +29,10 @@ export function summarizeCone(
   stack: Stack,
   field: ConeField,
   limit = limitOf(stack),
-): Omit<ConeSummary, 'half_turn_symmetry'> {
+): Omit<ConeSummary, 'half_turn_symmetry' | 'diffuse_reflectance'> {
   return {
     worst: worstOf(field),
     ...(limit !== undefined && { limit, ...withinLimit(field, limit) }),
-    diffuse_reflectance: diffuseReflectance(stack),
   }
 }
 
@@ -80,7 +79,7 @@ const DIFFUSE_POLAR = 16
 const DIFFUSE_AZIMUTHS = 12
 
 /** 2 ∫ R(θ) cos θ d(cos θ), averaged over azimuth. */
-function diffuseReflectance(stack: Stack): number {
+export function diffuseReflectance(stack: Stack): number {
   const scene = new Scene(stack)
   const { nodes, weights } = gaussLegendre(DIFFUSE_POLAR)
   let sum = 0

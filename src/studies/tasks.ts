@@ -1,5 +1,5 @@
 import { compareJob } from './compareJob.js'
-import { coneRow } from './cone.js'
+import { coneRow, diffuseAverage } from './cone.js'
 import { fitParameters } from './fit.js'
 import { optimizeJob } from './optimize.js'
 import type { Task } from './parallel.js'
@@ -16,6 +16,7 @@ export const TASKS: ReadonlyMap<string, Task<never, never, unknown>> = new Map(
     fitParameters,
     fitSingleFault,
     coneRow,
+    diffuseAverage,
     optimizeJob,
     sweepBlock,
     toleranceBlock,

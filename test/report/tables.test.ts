@@ -55,7 +55,7 @@ describe('JSON', () => {
   })
 
   test('keys without a value are absent; lists of numbers stand on one line', () => {
-    expect(jsonText({ a: undefined, b: [1, 2.5] })).toBe('{\n  "b": [1, 2.5]\n}\n')
+    expect(jsonText({ a: undefined, b: [1, 2.5] })).toBe('{\n  "b": [1,2.5]\n}\n')
   })
 })
 

@@ -162,8 +162,8 @@ describe('the summary', () => {
 
 describe('stopped half way', () => {
   it('keeps the rows that are done', async () => {
-    let polled = 0
-    const found = await cone(LAMINATE, QUESTION, { stopped: () => polled++ >= 2 })
+    let done = 0
+    const found = await cone(LAMINATE, QUESTION, { progress: () => done++, stopped: () => done >= 2 })
     expect(found.interrupted).toBe(true)
     expect(found.theta_deg).toEqual([0, 15])
     expect(found.luminous_reflectance).toHaveLength(2)

@@ -1,10 +1,10 @@
 import { type Response, Sensitivity } from '../optics/sensitivity.js'
 import type { Solver } from '../optics/solver.js'
-import { compileParameters, compileSetter, findParameter } from '../stack/parameters.js'
+import { compileParameters } from '../stack/parameters.js'
 import type { Direction, Stack } from '../stack/stack.js'
-import type { QuantityKind } from '../units/quantity.js'
 import { metricValue } from './metric.js'
 import { metricWeights, type SpectralMetric } from './metricWeights.js'
+import { compileDifference } from './parameterDifference.js'
 import { type Look, Scene } from './scene.js'
 
 /** Value returned; its derivative by each parameter (per nm, rad, fraction) into `gradient`. */
@@ -13,17 +13,6 @@ export type GradientExperiment = (parameters: Float64Array, gradient: Float64Arr
 /** A view of the metric and its weight in the sum. */
 export interface WeightedView extends Direction {
   readonly weight: number
-}
-
-/** Half the step of the layers' own central differences: small against a wavelength, a turn, a share. */
-export const DIFFERENCE_STEPS: Readonly<Record<QuantityKind, number>> = {
-  length: 0.01,
-  angle: 1e-5,
-  share: 1e-6,
-  number: 1e-6,
-  illuminance: 1e-3,
-  luminance: 1e-3,
-  temperature: 1e-3,
 }
 
 /**
@@ -39,10 +28,7 @@ export function createGradientExperiment(
 ): GradientExperiment {
   const scene = new Scene(stack, wavelengthsNm)
   const withParameters = compileParameters(stack, paths)
-  const parameters = paths.map((path) => ({
-    set: compileSetter(stack, path),
-    step: DIFFERENCE_STEPS[findParameter(stack, path)?.kind ?? 'number'],
-  }))
+  const differences = paths.map((path) => compileDifference(stack, path))
   const sensitivities = new Map<Solver, Sensitivity>()
   const change = new Float64Array(scene.wavelengthsNm.length)
 
@@ -50,10 +36,9 @@ export function createGradientExperiment(
     const sensitivity = sensitivityOf(sensitivities, look.solver)
     for (const [response, weights] of Object.entries(metricWeights(scene, look, metric))) {
       sensitivity.prepare(response as Response)
-      parameters.forEach(({ set, step }, k) => {
-        const plus = scene.variantOf(set(base, x[k] + step), base)
-        const minus = scene.variantOf(set(base, x[k] - step), base)
-        sensitivity.derivative(plus, minus, 2 * step, change)
+      differences.forEach((differenceAt, k) => {
+        const { plus, minus, apart } = differenceAt(base, x[k])
+        sensitivity.derivative(scene.variantOf(plus, base), scene.variantOf(minus, base), apart, change)
         gradient[k] += weight * dot(weights, change)
       })
     }

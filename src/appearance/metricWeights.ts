@@ -1,4 +1,4 @@
-import { xyzToLab } from '../color/cielab.js'
+import { chroma, compressionSlopes } from '../color/cielab.js'
 import type { MetricName } from '../stack/stack.js'
 import type { Look, Scene } from './scene.js'
 
@@ -48,15 +48,22 @@ function combine({ weights }: Scene, [x, y, z]: readonly [number, number, number
 
 type Triple = readonly [number, number, number]
 
-/** d(metric)/d(X, Y, Z), by central differences of the closed form (its cube roots are smooth where there is light). */
-function labSlopes({ xyz }: Look, white: Triple, metric: 'lightness' | 'a_star' | 'b_star' | 'chroma'): Triple {
-  const value = (shifted: Triple) => {
-    const [lightness, a, b] = xyzToLab(shifted, white)
-    return { lightness, a_star: a, b_star: b, chroma: Math.sqrt(a * a + b * b) }[metric]
+/** d(metric)/d(X, Y, Z), from the differentials of L*, a*, b* and of C*ab = √(a*² + b*²); zero at the tip of the cone C*ab = 0. */
+function labSlopes({ xyz, lab }: Look, white: Triple, metric: 'lightness' | 'a_star' | 'b_star' | 'chroma'): Triple {
+  const [fx, fy, fz] = compressionSlopes(xyz, white)
+  const a: Triple = [500 * fx, -500 * fy, 0]
+  const b: Triple = [0, 200 * fy, -200 * fz]
+  switch (metric) {
+    case 'lightness':
+      return [0, 116 * fy, 0]
+    case 'a_star':
+      return a
+    case 'b_star':
+      return b
+    case 'chroma': {
+      const size = chroma(lab) || 1
+      const along = (axis: 0 | 1 | 2) => (lab[1] * a[axis] + lab[2] * b[axis]) / size
+      return [along(0), along(1), along(2)]
+    }
   }
-  return [0, 1, 2].map((axis) => {
-    const h = 1e-5 * Math.max(1e-3, xyz[axis])
-    const at = (sign: number) => value(xyz.map((c, k) => (k === axis ? c + sign * h : c)) as unknown as Triple)
-    return (at(1) - at(-1)) / (2 * h)
-  }) as unknown as Triple
 }

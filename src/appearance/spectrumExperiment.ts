@@ -1,8 +1,8 @@
 import { Sensitivity } from '../optics/sensitivity.js'
 import type { Solver } from '../optics/solver.js'
-import { compileParameters, compileSetter, findParameter } from '../stack/parameters.js'
+import { compileParameters } from '../stack/parameters.js'
 import type { Direction, Stack } from '../stack/stack.js'
-import { DIFFERENCE_STEPS } from './gradientExperiment.js'
+import { compileDifference } from './parameterDifference.js'
 import { Scene } from './scene.js'
 
 /** Reflectance of the stack at measured directions and wavelengths, as a function of some of its parameters. */
@@ -25,10 +25,7 @@ export function createSpectrumExperiment(
 ): SpectrumExperiment {
   const withParameters = compileParameters(stack, paths)
   const scenes = scenesOf(stack, directions)
-  const parameters = paths.map((path) => ({
-    set: compileSetter(stack, path),
-    step: DIFFERENCE_STEPS[findParameter(stack, path)?.kind ?? 'number'],
-  }))
+  const differences = paths.map((path) => compileDifference(stack, path))
   const sensitivities = new Map<Solver, Sensitivity>()
   const offsets = directions.map((_, d) =>
     directions.slice(0, d).reduce((sum, { wavelengthNm }) => sum + wavelengthNm.length, 0),
@@ -49,10 +46,9 @@ export function createSpectrumExperiment(
       sensitivities.set(solver, sensitivity)
       sensitivity.prepare('reflectance')
       const change = new Float64Array(wavelengthNm.length)
-      parameters.forEach(({ set, step }, k) => {
-        const plus = scenes[d].variantOf(set(base, x[k] + step), base)
-        const minus = scenes[d].variantOf(set(base, x[k] - step), base)
-        sensitivity.derivative(plus, minus, 2 * step, change)
+      differences.forEach((differenceAt, k) => {
+        const { plus, minus, apart } = differenceAt(base, x[k])
+        sensitivity.derivative(scenes[d].variantOf(plus, base), scenes[d].variantOf(minus, base), apart, change)
         change.forEach((slope, i) => {
           out[(offsets[d] + i) * paths.length + k] = slope
         })

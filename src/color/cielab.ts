@@ -26,6 +26,16 @@ function compress(t: number): number {
   return t > DELTA ** 3 ? Math.cbrt(t) : t / (3 * DELTA * DELTA) + 4 / 29
 }
 
+/** Slopes of the compressed X, Y, Z: L* = 116 fY - 16, a* = 500 (fX - fY), b* = 200 (fY - fZ), by X, Y and Z. */
+export function compressionSlopes(xyz: Triple, white: Triple): [number, number, number] {
+  const slope = (axis: 0 | 1 | 2) => compressionSlope(xyz[axis] / white[axis]) / white[axis]
+  return [slope(0), slope(1), slope(2)]
+}
+
+function compressionSlope(t: number): number {
+  return t > DELTA ** 3 ? 1 / (3 * Math.cbrt(t) ** 2) : 1 / (3 * DELTA * DELTA)
+}
+
 function expand(f: number): number {
   return f > DELTA ? f ** 3 : 3 * DELTA * DELTA * (f - 4 / 29)
 }

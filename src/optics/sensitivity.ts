@@ -45,6 +45,7 @@ export class Sensitivity {
   private readonly up: Float64Array
   private readonly plus: Packet
   private readonly minus: Packet
+  private response: Response = 'reflectance'
 
   constructor(private readonly solver: Solver) {
     const n = solver.wavelengthsNm.length
@@ -56,6 +57,7 @@ export class Sensitivity {
 
   /** One pass from the top down at the solver's present state, for the response asked. */
   prepare(response: Response): void {
+    this.response = response
     const { segments, levels, cosTheta } = this.solver
     this.solver.fillLevels(segments.length - 1)
     const n = this.solver.wavelengthsNm.length
@@ -69,15 +71,16 @@ export class Sensitivity {
       for (let j = segments.length - 1; j >= 0; j--) {
         const packet = segments[j].packet
         const adjoint = this.adjoints[j]
-        if (response === 'front_reflectance') Z.fill(0)
-        else this.crossPacket(packet, levels[j], response === 'emission', i, n)
+        if (response === 'front_reflectance') {
+          Z.fill(0)
+          A_UP.fill(0)
+        } else this.crossPacket(packet, levels[j], response === 'emission', i, n)
         backproject(V, packet.r, U, adjoint.r, i, n)
         backproject(V, packet.t, Z, adjoint.t, i, n)
         backproject(A_UP, packet.rBelow, Z, adjoint.rBelow, i, n)
         backproject(A_UP, packet.tUp, U, adjoint.tUp, i, n)
         if (response === 'front_reflectance') {
-          setVector(U, 0, 0, 0, 0)
-          setVector(A_UP, 0, 0, 0, 0)
+          U.fill(0)
           continue
         }
         V.set(X)
@@ -106,7 +109,11 @@ export class Sensitivity {
       if (!this.solver.packetOf(j, plus.layers, plus.panel, this.plus)) continue
       this.solver.packetOf(j, minus.layers, minus.panel, this.minus)
       const adjoint = this.adjoints[j]
-      for (const part of PARTS) addTrace(this.plus[part], this.minus[part], adjoint[part], 2 / twoH, out, n)
+      const here = this.solver.segments[j].packet
+      for (const part of PARTS) {
+        addTrace(this.plus[part], here[part], adjoint[part], 2 / twoH, out, n)
+        addTrace(this.minus[part], here[part], adjoint[part], -2 / twoH, out, n)
+      }
     }
     this.addPanelChange(plus.panel, minus.panel, twoH, out)
   }
@@ -143,10 +150,11 @@ export class Sensitivity {
     const n = this.solver.wavelengthsNm.length
     const above = this.solver.panelLevel(plus)
     const below = this.solver.panelLevel(minus)
+    const emits = this.response === 'emission'
     for (let i = 0; i < n; i++) {
       let sum = 0
       for (let row = 0; row < 4; row++) {
-        let change = 0
+        let change = emits ? above.e[row * n + i] - below.e[row * n + i] : 0
         for (let column = 0; column < 4; column++) {
           const k = (4 * row + column) * n + i
           change += (above.w[k] - below.w[k]) * this.down[column * n + i]
@@ -154,6 +162,18 @@ export class Sensitivity {
         sum += this.up[row * n + i] * change
       }
       out[i] += sum / twoH
+    }
+    if (emits) this.addFluxChange(plus, minus, twoH, out)
+  }
+
+  /** The flux that unit emitted flux stands for depends on the immersion medium. */
+  private addFluxChange(plus: PanelEnd, minus: PanelEnd, twoH: number, out: Float64Array): void {
+    const { solver } = this
+    const emission = new Float64Array(out.length)
+    solver.emissionTransmittance(emission)
+    for (let i = 0; i < out.length; i++) {
+      const change = solver.fluxFactor(i, plus) - solver.fluxFactor(i, minus)
+      out[i] += (emission[i] * change) / (solver.fluxFactor(i) * twoH)
     }
   }
 }
@@ -192,24 +212,35 @@ function backproject(s: Float64Array, m: Float64Array, u: Float64Array, out: Flo
   }
 }
 
-/** out += factor Re tr((plus - minus) adjoint). */
+/**
+ * out += factor Re tr(e^{-iψ} m adjoint), with ψ the phase of m over that of `here` as a whole, from tr(here† m). Only m ⊗ m* counts, so
+ * such a phase changes nothing; but that of a thick layer runs so fast that its difference would drown the rest.
+ */
 function addTrace(
-  plus: Float64Array,
-  minus: Float64Array,
+  m: Float64Array,
+  here: Float64Array,
   adjoint: Float64Array,
   factor: number,
   out: Float64Array,
   n: number,
 ): void {
   for (let i = 0; i < n; i++) {
-    let sum = 0
-    for (let row = 0; row < 2; row++) {
-      for (let column = 0; column < 2; column++) {
-        const k = (4 * row + 2 * column) * n + i
-        const t = (4 * column + 2 * row) * n + i
-        sum += (plus[k] - minus[k]) * adjoint[t] - (plus[k + n] - minus[k + n]) * adjoint[t + n]
-      }
+    let alongRe = 0
+    let alongIm = 0
+    let sumRe = 0
+    let sumIm = 0
+    for (let entry = 0; entry < 4; entry++) {
+      const k = 2 * entry * n + i
+      const t = 2 * TRANSPOSED[entry] * n + i
+      alongRe += here[k] * m[k] + here[k + n] * m[k + n]
+      alongIm += here[k] * m[k + n] - here[k + n] * m[k]
+      sumRe += m[k] * adjoint[t] - m[k + n] * adjoint[t + n]
+      sumIm += m[k] * adjoint[t + n] + m[k + n] * adjoint[t]
     }
-    out[i] += factor * sum
+    const along = Math.hypot(alongRe, alongIm)
+    out[i] += factor * (along > 0 ? (sumRe * alongRe + sumIm * alongIm) / along : sumRe)
   }
 }
+
+/** Place of an entry of a 2×2, row-major, in its transpose. */
+const TRANSPOSED = [0, 2, 1, 3] as const

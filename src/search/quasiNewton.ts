@@ -2,8 +2,9 @@
  * Minimization with a gradient in a box: projected quasi-Newton.
  *
  * In scaled coordinates u (every range is [0, 1]), with g = df/du and B a positive definite model of the Hessian:
- * 1. A bound is active where u lies on it and -g points out of the box. Active coordinates rest; for the free ones F the
- *    step p solves B_FF p = -g_F (Bertsekas, SIAM J. Control Optim. 20, 221 (1982), doi:10.1137/0320018).
+ * 1. A bound is active where u lies on it or a hair beside it and -g points out of the box. Active coordinates go to their bound;
+ *    for the free ones F the step p solves B_FF p = -g_F (Bertsekas, SIAM J. Control Optim. 20, 221 (1982),
+ *    doi:10.1137/0320018: without the hair, steps across a bound leave no room for the others).
  * 2. Along the projected path u(t) = P[u + t p], t is shortened from 1 until f(u(t)) <= f(u) + 1e-4 gᵀ(u(t) - u).
  * 3. B takes up the change y of g over the step s by the BFGS formula, with Powell's damping where sᵀy is too small, so that
  *    B stays positive definite (Nocedal, Wright, Numerical Optimization, 2nd ed., procedure 18.2).
@@ -23,6 +24,8 @@ import { Space, type Variable } from './variables.js'
 /** Longest first step, and longest step at all, as shares of a variable's range: a polish is to stay in its basin. */
 const FIRST_STEP = 0.1
 const LONGEST_STEP = 0.3
+/** The hair beside a bound. */
+const EDGE = 1e-3
 const SUFFICIENT_DECREASE = 1e-4
 const SHORTEST_SHARE = 1e-10
 /** So many steps in turn that gain less than the tolerance end the search: one alone may be the model's fault. */
@@ -72,7 +75,7 @@ class Descent {
     const { continuous } = this.space
     let here = this.at(continuous.map((i) => this.space.toUnit(i, this.x[i])))
     if (!Number.isFinite(here.value)) return 'stalled'
-    this.hessian = diagonal(continuous.length, (largest(here.g) || 1) / FIRST_STEP)
+    this.hessian = firstModel(here.g)
     let quiet = 0
     for (;;) {
       const free = this.freeCoordinates(here)
@@ -100,21 +103,29 @@ class Descent {
 
   private freeCoordinates({ u, g }: Point): number[] {
     const isFree = (k: number): boolean =>
-      this.space.isPeriodic(this.space.continuous[k]) || !((u[k] <= 0 && g[k] > 0) || (u[k] >= 1 && g[k] < 0))
+      this.space.isPeriodic(this.space.continuous[k]) || !((u[k] <= EDGE && g[k] > 0) || (u[k] >= 1 - EDGE && g[k] < 0))
     return u.map((_, k) => k).filter(isFree)
   }
 
-  /** The quasi-Newton step of the free coordinates, zero for the others, no longer than allowed. */
-  private step({ g }: Point, free: readonly number[]): number[] {
-    const p = new Array<number>(g.length).fill(0)
+  /** The quasi-Newton step of the free coordinates, the way to the bound for the others; no longer than allowed. */
+  private step({ u, g }: Point, free: readonly number[]): number[] {
+    const p = u.map((component, k) => (free.includes(k) ? 0 : (g[k] > 0 ? 0 : 1) - component))
     if (free.length === 0) return p
-    const model = new Matrix(free.map((a) => free.map((b) => this.hessian[a][b])))
-    const solved = new CholeskyDecomposition(model).solve(Matrix.columnVector(free.map((k) => -g[k])))
+    const solved = this.factored(free, g).solve(Matrix.columnVector(free.map((k) => -g[k])))
     free.forEach((k, row) => {
       p[k] = solved.get(row, 0)
     })
     const shorten = Math.min(1, LONGEST_STEP / largest(p))
     return p.map((component) => component * shorten)
+  }
+
+  /** B_FF; where rounding has cost it its definiteness, the model begins anew. */
+  private factored(free: readonly number[], g: readonly number[]): CholeskyDecomposition {
+    const factor = () => new CholeskyDecomposition(new Matrix(free.map((a) => free.map((b) => this.hessian[a][b]))))
+    const known = factor()
+    if (known.isPositiveDefinite()) return known
+    this.hessian = firstModel(g)
+    return factor()
   }
 
   /** The first point along the projected path that is better by enough; undefined where none is. */
@@ -149,6 +160,11 @@ class Descent {
     const sr = dot(s, r)
     this.hessian = this.hessian.map((row, a) => row.map((b, k) => b - (bs[a] * bs[k]) / model + (r[a] * r[k]) / sr))
   }
+}
+
+/** A model by which the first step is as long as allowed. */
+function firstModel(g: readonly number[]): number[][] {
+  return diagonal(g.length, (largest(g) || 1) / FIRST_STEP)
 }
 
 function diagonal(size: number, value: number): number[][] {

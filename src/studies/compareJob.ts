@@ -1,6 +1,6 @@
 /** One candidate of a comparison, searched: by itself, or quickly from what others taught. */
 import { globalSearch } from '../search/globalSearch.js'
-import { byMerit, type Candidate, isBetter, type SearchProblem, violationOf } from '../search/problem.js'
+import { byMerit, type Candidate, type SearchProblem, violationOf } from '../search/problem.js'
 import { runSearchJob, searchInline } from '../search/searchJob.js'
 import { StartPoints } from '../search/startPoints.js'
 import { Space } from '../search/variables.js'
@@ -36,6 +36,8 @@ export interface SearchedCandidate {
   readonly violation: number
   /** The distinct good designs found, best first. */
   readonly designs: readonly (readonly number[])[]
+  /** Of a quick search: without its constraints it would have ended elsewhere. */
+  readonly isHeld?: boolean
 }
 
 export const compareJob: Task<CompareShared, CompareJob, SearchedCandidate> = {
@@ -91,7 +93,9 @@ const POLISHED = 6
 /** Designs nearer than this share of the ranges lead to the same optimum. */
 const APART = 0.05
 const QUICK_TOLERANCE = 1e-4
-const QUICK_EVALUATIONS = 400
+const QUICK_EVALUATIONS = 600
+/** Starts from which constraints are heeded once one is missed. */
+const HEEDED = 3
 
 function quickSearch(
   stack: Stack,
@@ -107,16 +111,21 @@ function quickSearch(
     ...designs.map((design) => space.nearest(design)),
     ...Array.from({ length: EVEN_POINTS }, (_, k) => even.point(k)),
   ]
-  // Constraints are often idle, and heeding them is dear without a gradient.
-  const { constraints: _, ...free } = coarse
-  const best = promising(coarse, space, points)
-    .map((start) => polished(free, start))
-    .reduce((a, b) => (isBetter(at(coarse, b.x), at(coarse, a.x)) ? b : a))
-  const heeded = at(coarse, best.x).violation > 0 ? polished(coarse, best.x) : best
-  const end = at(full, heeded.x)
+  const { end, isHeld } = quickEnd(coarse, promising(coarse, space, points))
+  const onAll = at(full, end.x)
   // Few wavelengths may let pass what misses a constraint on all.
-  const { x, value, violation } = heeded.violation === 0 && end.violation > 0 ? polished(full, heeded.x) : end
-  return { x: Array.from(x), value, violation, designs: [] }
+  const { x, value, violation } = end.violation === 0 && onAll.violation > 0 ? polished(full, end.x) : onAll
+  return { x: Array.from(x), value, violation, designs: [], isHeld }
+}
+
+/** Constraints are often idle, and heeding them is dear without a gradient: they are left aside until one is missed. */
+function quickEnd(coarse: SearchProblem, starts: readonly Float64Array[]): { end: Candidate; isHeld: boolean } {
+  const { constraints: _, ...free } = coarse
+  const ends = starts.map((start) => at(coarse, polished(free, start).x))
+  const lowest = ends.reduce((a, b) => (b.value < a.value ? b : a))
+  if (lowest.violation === 0) return { end: lowest, isHeld: false }
+  const heeded = [lowest.x, ...starts.slice(0, HEEDED)].map((start) => polished(coarse, start))
+  return { end: [...ends, ...heeded].sort(byMerit)[0], isHeld: true }
 }
 
 function polished(problem: SearchProblem, start: Float64Array): Candidate {

@@ -4,7 +4,7 @@
  * 1. A seeded random sample of the candidates, the pilots, is searched each by itself, on all wavelengths.
  * 2. Every candidate is searched quickly, on few wavelengths, from the designs that did well among the pilots.
  * 3. By how much the quick search falls short of one by itself is seen on those searched both ways; three times the largest
- *    shortfall is taken as its bound. A candidate whose quick value, less that bound, is still worse than what enough others
+ *    shortfall is taken as its bound, one for searches that a constraint held and one for the others. A candidate whose quick value, less that bound, is still worse than what enough others
  *    surely reach is ruled out. All others are searched by themselves, and the bound is taken anew with their shortfalls, until
  *    nothing more is to be searched.
  */
@@ -90,8 +90,9 @@ async function searchOpen(
 ): Promise<Pick<Rounds, 'margin' | 'complete'>> {
   const begun = new Set<number>()
   for (let from = AFTER_QUICK, to = AFTER_FIRST_OPEN; ; [from, to] = [to, (1 + to) / 2]) {
-    const margin = marginOf(full, quick)
-    const open = openCandidates(full, quick, keep, margin).filter((k) => !begun.has(k))
+    const margins = quick.map((end) => marginOf(full, quick, end.isHeld))
+    const open = openCandidates(full, quick, keep, margins).filter((k) => !begun.has(k))
+    const margin = Math.max(0, ...margins.filter((_, k) => !full.has(k)))
     if (open.length === 0) return { margin, complete: true }
     const jobs = open.map((k): CompareJob => ({ kind: 'full', choice: choices[k], from: quick[k].x }))
     const ends = await run(jobs, from, to)
@@ -137,15 +138,23 @@ function together(
   })
 }
 
-/** Infinite where a quick search missed that the constraints can be met. */
-function marginOf(full: ReadonlyMap<number, SearchedCandidate>, quick: readonly SearchedCandidate[]): number {
-  let margin = 0
-  for (const [k, { value, violation }] of full) {
-    if (violation > 0) continue
-    const shortfall = quick[k].violation > 0 ? Number.POSITIVE_INFINITY : quick[k].value - value
-    margin = Math.max(margin, SAFETY * shortfall, LEAST_MARGIN * Math.abs(value))
-  }
-  return margin
+/**
+ * Bound for the shortfall of quick searches of one sort: held by a constraint or not. Infinite where none of that sort was searched
+ * both ways, or one missed that the constraints can be met.
+ */
+function marginOf(
+  full: ReadonlyMap<number, SearchedCandidate>,
+  quick: readonly SearchedCandidate[],
+  isHeld: boolean | undefined,
+): number {
+  const margins = [...full].filter(([k]) => quick[k].isHeld === isHeld).map(([k, end]) => shortfallBound(end, quick[k]))
+  return margins.length === 0 ? Number.POSITIVE_INFINITY : Math.max(...margins)
+}
+
+function shortfallBound({ value, violation }: SearchedCandidate, quick: SearchedCandidate): number {
+  if (violation > 0) return 0
+  if (quick.violation > 0) return Number.POSITIVE_INFINITY
+  return Math.max(SAFETY * (quick.value - value), LEAST_MARGIN * Math.abs(value))
 }
 
 /** Those perhaps among the best `keep` but not yet searched by themselves, or found better by the quick search than so. */
@@ -153,13 +162,13 @@ function openCandidates(
   full: ReadonlyMap<number, SearchedCandidate>,
   quick: readonly SearchedCandidate[],
   keep: number,
-  margin: number,
+  margins: readonly number[],
 ): number[] {
   const reached = quick.map((end, k) => full.get(k) ?? end).sort(byMerit)
   const bar = reached[Math.min(keep, reached.length) - 1]
   const isOpen = (end: SearchedCandidate, k: number): boolean => {
     const known = full.get(k)
-    return known === undefined ? mayReach(end, bar, margin) : isBetter(end, known)
+    return known === undefined ? mayReach(end, bar, margins[k]) : isBetter(end, known)
   }
   return quick.flatMap((end, k) => (isOpen(end, k) ? [k] : []))
 }

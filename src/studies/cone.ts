@@ -96,13 +96,12 @@ export async function cone(
 ): Promise<Cone> {
   const thetas = [...divided(question.thetaMax, question.thetaStep), question.thetaMax]
   const phis = divided(2 * Math.PI, question.phiStep)
+  // Asked for first: workers start on it while the symmetry is looked into here.
+  const diffusing = map(diffuseAverage, { stack }, [null], { stopped: hooks.stopped })
   const half = phis.length % 2 === 0 && hasHalfTurnSymmetry(stack, question.thetaMax)
   const computed = half ? phis.slice(0, phis.length / 2) : phis
   const shared = { stack, phis: computed }
-  const [asked, [diffuse]] = await Promise.all([
-    map(coneRow, shared, thetas, hooks),
-    map(diffuseAverage, { stack }, [null], { stopped: hooks.stopped }),
-  ])
+  const [asked, [diffuse]] = await Promise.all([map(coneRow, shared, thetas, hooks), diffusing])
   const rings = leadingResults(asked)
   // Head-on there is always something to tell, however early the study was stopped.
   const done = rings.length > 0 ? rings : leadingResults(await mapInline(coneRow, shared, thetas.slice(0, 1)))

@@ -87,7 +87,8 @@ export async function optimize(
     margin,
     maxEvaluations: settings.maxEvaluations,
     stopped: hooks.stopped,
-    progress: (done, best) => hooks.progress?.(done, `best so far ${shown(question.minimize.metric, sense * best.value)}`),
+    progress: (done, best) =>
+      hooks.progress?.(done, `best so far ${shown(question.minimize.metric, sense * best.value)}`),
   })
   const describe = describer(stack, question)
   const best = found.families[0]

@@ -6,7 +6,7 @@ import { type FrontAxis, isWord } from '../studies/frontAxis.js'
 import { fixed } from './decimals.js'
 import { ESTIMATE_CAUTION } from './evaluateText.js'
 import { metricKeyLabel, metricKeyNumber, metricKeyUnit } from './metricKeyText.js'
-import { metricNumber, metricWithUnit } from './metricNumber.js'
+import { metricNumber } from './metricNumber.js'
 import { type Paint, PLAIN } from './paint.js'
 import { parameterText } from './parameterText.js'
 import { type Column, textTable } from './textTable.js'
@@ -106,11 +106,22 @@ function axisLabel(axis: FrontAxis): string {
   return metricKeyLabel(axis)
 }
 
-function ruledOutText(stack: Stack, { ruled_out, margin }: Comparison): string {
-  if (ruled_out === 0 || margin === undefined) return ''
-  const bound = metricWithUnit(rankedBy(stack), margin)
+function ruledOutText(stack: Stack, { ruled_out, margins }: Comparison): string {
+  if (margins === undefined) return ''
+  const { free, held } = margins
+  const bounds = [
+    ...(free === undefined ? [] : [boundText(stack, free)]),
+    ...(held === undefined ? [] : [`${boundText(stack, held)} where a constraint held it`]),
+  ]
   return (
-    `${ruled_out} candidates were ruled out by a quick search: they would not be among the best even if it fell short by ${bound},\n` +
-    'three times the most it did where candidates were searched both ways; their numbers are those of the quick search'
+    `${ruled_out} candidates were ruled out by a quick search: they would not be among the best even if it fell short by\n` +
+    `${bounds.join(', or by ')}: three times the most it did where candidates were searched both ways;\n` +
+    'their numbers are those of the quick search'
   )
+}
+
+/** A bound to two digits: it may be finer than the decimals of the table. */
+function boundText(stack: Stack, bound: number): string {
+  const { factor, unit } = METRIC_QUANTITIES[rankedBy(stack)]
+  return `${Number((factor * bound).toPrecision(2))} ${unit}`.trim()
 }

@@ -150,7 +150,8 @@ class Descent {
   private learn(before: Point, after: Point): void {
     const s = difference(after.u, before.u)
     const y = difference(after.g, before.g)
-    if (this.iterations === 1 && dot(s, y) > 0) this.hessian = diagonal(s.length, dot(y, y) / dot(s, y))
+    const scale = dot(y, y) / dot(s, y)
+    if (this.iterations === 1 && scale > 0 && Number.isFinite(scale)) this.hessian = diagonal(s.length, scale)
     const bs = this.hessian.map((row) => dot(row, s))
     const model = dot(s, bs)
     if (!(model > 0)) return
@@ -158,7 +159,9 @@ class Descent {
     const share = curvature >= DAMPING * model ? 1 : ((1 - DAMPING) * model) / (model - curvature)
     const r = y.map((component, k) => share * component + (1 - share) * bs[k])
     const sr = dot(s, r)
-    this.hessian = this.hessian.map((row, a) => row.map((b, k) => b - (bs[a] * bs[k]) / model + (r[a] * r[k]) / sr))
+    const learned = this.hessian.map((row, a) => row.map((b, k) => b - (bs[a] * bs[k]) / model + (r[a] * r[k]) / sr))
+    // Steps and slopes may be so small that their products vanish.
+    if (learned.flat().every(Number.isFinite)) this.hessian = learned
   }
 }
 

@@ -5,6 +5,8 @@ import type { Fault } from './fault.js'
 export interface CsvTable {
   /** Column headings where the first row has them. */
   readonly heading?: readonly string[]
+  /** 1-based line of the headings, or of the first row where there are none. */
+  readonly firstLine: number
   /** Numbers as written (percent turned into fractions), with the 1-based line each row stands on. */
   readonly rows: readonly { readonly line: number; readonly values: readonly number[] }[]
 }
@@ -62,7 +64,7 @@ function numbersOf(records: ReturnType<typeof parse>, delimiter: string): CsvTab
     if (bad >= 0) return badCell(info.lines, bad, record[bad])
     rows.push({ line: info.lines, values })
   }
-  return { ...(heading && { heading }), rows }
+  return { ...(heading && { heading }), firstLine: first.info.lines, rows }
 }
 
 /** NaN where the cell holds no number. */

@@ -5,14 +5,10 @@ import { InputError, type Problem } from './problem.js'
 export interface MeasuredSpectrum {
   readonly theta: number
   readonly phi: number
+  /** Ascending. */
   readonly wavelengthNm: readonly number[]
   readonly reflectance: readonly number[]
 }
-
-const LONG_HEADINGS = ['wavelength_nm', 'theta_deg', 'phi_deg', 'reflectance'] as const
-
-/** Readings a sample can have: noise may push a dark one a little below nothing. */
-const SANE: readonly [number, number] = [-0.05, 1.5]
 
 /**
  * Measured spectra from CSV: long form (`wavelength_nm,theta_deg,phi_deg,reflectance`), or wide, one column a direction, its
@@ -21,124 +17,148 @@ const SANE: readonly [number, number] = [-0.05, 1.5]
  */
 export function readMeasured(text: string, file: string): MeasuredSpectrum[] {
   const table = readCsvTable(text)
-  if (!('rows' in table)) {
-    const { line, ...fault } = table
-    throw problemAt(file, text, fault, line)
+  if ('rows' in table) {
+    const readings = isLong(table) ? fromLong(table) : fromWide(table)
+    const spectra = Array.isArray(readings) ? spectraOf(readings) : readings
+    if (Array.isArray(spectra)) return spectra
+    throw problemAt(file, text, spectra)
   }
-  const spectra = isLong(table) ? fromLong(table, file, text) : fromWide(table, file, text)
-  return spectra.map(sorted)
+  throw problemAt(file, text, table)
 }
 
+const LONG_HEADINGS = ['wavelength_nm', 'theta_deg', 'phi_deg', 'reflectance'] as const
+const ALLOWED_HEADINGS = `columns ${LONG_HEADINGS.join(', ')}`
+
+/** What is wrong, on a line counted from 1 (absent where the whole file is meant). */
+type Fault = Pick<Problem, 'code' | 'message' | 'received' | 'allowed' | 'next'> & { readonly line?: number }
+
+/** One reading with the line to be told where it is wrong: its row's, or for a direction the heading's. */
+interface Reading {
+  readonly line: number
+  readonly directionLine: number
+  readonly nm: number
+  readonly thetaDeg: number
+  readonly phiDeg: number
+  readonly reflectance: number
+}
+
+/** A wide table may have as many columns, and name both angles in one heading. */
 function isLong({ heading, rows }: CsvTable): boolean {
-  if (heading === undefined) return rows[0].values.length === 4
-  return (
-    heading.some((name) => /theta/i.test(name)) && heading.some((name) => /phi/i.test(name)) && heading.length === 4
+  if (heading === undefined) return rows[0].values.length === LONG_HEADINGS.length
+  const names = (word: RegExp) => heading.some((cell) => word.test(cell))
+  return heading.length === LONG_HEADINGS.length && names(/^theta\D*$/i) && names(/^phi\D*$/i)
+}
+
+function fromLong({ heading, firstLine, rows }: CsvTable): Reading[] | Fault {
+  const words = ['wavelength', 'theta', 'phi', 'reflectance']
+  const columns = words.map((word, k) => heading?.findIndex((cell) => cell.toLowerCase().startsWith(word)) ?? k)
+  const absent = columns.indexOf(-1)
+  if (absent >= 0) {
+    const message = `the table has no column "${words[absent]}"`
+    return { code: 'bad_table', line: firstLine, message, received: heading?.join(', '), allowed: ALLOWED_HEADINGS }
+  }
+  return rows.map(({ line, values }) => {
+    const [nm, thetaDeg, phiDeg, reflectance] = columns.map((column) => values[column])
+    return { line, directionLine: line, nm, thetaDeg, phiDeg, reflectance }
+  })
+}
+
+function fromWide({ heading, firstLine, rows }: CsvTable): Reading[] | Fault {
+  const directions = (heading ?? []).slice(1).map(directionIn)
+  const known = directions.filter((direction) => direction !== undefined)
+  if (known.length === 0 || known.length < directions.length) {
+    const message = 'the columns do not tell from where the spectra were measured'
+    const received = heading?.join(', ') ?? 'no headings'
+    const allowed = `${ALLOWED_HEADINGS}; or one column a direction, headed by theta and phi such as 45/90`
+    return { code: 'bad_table', line: firstLine, message, received, allowed }
+  }
+  return known.flatMap(([thetaDeg, phiDeg], k) =>
+    rows.map(({ line, values: [nm, ...values] }) => ({
+      line,
+      directionLine: firstLine,
+      nm,
+      thetaDeg,
+      phiDeg,
+      reflectance: values[k],
+    })),
   )
 }
 
-function fromLong({ heading, rows }: CsvTable, file: string, text: string): MeasuredSpectrum[] {
-  const column = (name: string, place: number) => {
-    const found = heading?.findIndex((cell) => cell.toLowerCase().startsWith(name)) ?? place
-    if (found >= 0) return found
-    const message = `the table has no column "${name}"`
-    const allowed = `columns ${LONG_HEADINGS.join(', ')}`
-    throw problemAt(file, text, { code: 'bad_table', message, received: heading?.join(', '), allowed }, 1)
-  }
-  const [wavelength, theta, phi, reflectance] = ['wavelength', 'theta', 'phi', 'reflectance'].map(column)
-  const groups = new Map<string, { theta: number; phi: number; wavelengthNm: number[]; reflectance: number[] }>()
-  for (const { line, values } of rows) {
-    checkReading(file, text, line, values[wavelength], values[theta], values[reflectance])
-    const key = `${values[theta]},${values[phi]}`
-    let group = groups.get(key)
-    if (group === undefined) {
-      group = { theta: radians(values[theta]), phi: radians(values[phi]), wavelengthNm: [], reflectance: [] }
-      groups.set(key, group)
-    }
-    group.wavelengthNm.push(values[wavelength])
-    group.reflectance.push(values[reflectance])
-  }
-  return [...groups.values()]
+/** θ and φ in degrees from `45/90`, `R(45, -90)`, `theta 45 deg, phi 90 deg`. */
+function directionIn(heading: string): readonly [number, number] | undefined {
+  const match = /(\d+(?:\.\d+)?)\D+?(-?\d+(?:\.\d+)?)/.exec(heading)
+  return match === null ? undefined : [Number(match[1]), Number(match[2])]
 }
 
-function fromWide({ heading, rows }: CsvTable, file: string, text: string): MeasuredSpectrum[] {
-  const directions = (heading ?? [])
-    .slice(1)
-    .map((cell) => /(\d+(?:\.\d+)?)\D+?(-?\d+(?:\.\d+)?)/.exec(cell.replace(/%/g, '')))
-  if (directions.length === 0 || directions.includes(null)) {
-    const message = 'the columns do not tell from where the spectra were measured'
-    const allowed = `columns ${LONG_HEADINGS.join(', ')}; or one column a direction, headed by theta and phi such as 45/90`
-    throw problemAt(
-      file,
-      text,
-      { code: 'bad_table', message, received: heading?.join(', ') ?? 'no headings', allowed },
-      1,
-    )
-  }
-  for (const { line, values } of rows) {
-    directions.forEach((direction, k) => {
-      checkReading(file, text, line, values[0], Number(direction?.[1]), values[k + 1])
-    })
-  }
-  return directions.map((direction, k) => ({
-    theta: radians(Number(direction?.[1])),
-    phi: radians(Number(direction?.[2])),
-    wavelengthNm: rows.map(({ values }) => values[0]),
-    reflectance: rows.map(({ values }) => values[k + 1]),
-  }))
+interface Limit {
+  readonly what: string
+  readonly allowed: string
+  readonly isWithin: (value: number) => boolean
+  readonly next?: string
 }
 
-function checkReading(
-  file: string,
-  text: string,
-  line: number,
-  nm: number,
-  thetaDeg: number,
-  reflectance: number,
-): void {
-  if (!(nm >= 200 && nm <= 2500)) {
-    throw problemAt(
-      file,
-      text,
-      { code: 'out_of_range', message: 'the wavelength is out of range', received: `${nm}`, allowed: '200 to 2500 nm' },
-      line,
-    )
-  }
-  if (!(thetaDeg >= 0 && thetaDeg < 90)) {
-    throw problemAt(
-      file,
-      text,
-      {
-        code: 'out_of_range',
-        message: 'theta is out of range',
-        received: `${thetaDeg}`,
-        allowed: '0 to below 90 degrees',
-      },
-      line,
-    )
-  }
-  if (!(reflectance >= SANE[0] && reflectance <= SANE[1])) {
-    const next = 'write percent as 4.2 %, or with % in the heading of the column'
-    throw problemAt(
-      file,
-      text,
-      {
-        code: 'out_of_range',
-        message: 'the reflectance is out of range',
-        received: `${reflectance}`,
-        allowed: 'a fraction from 0 to 1',
-        next,
-      },
-      line,
-    )
-  }
+const WAVELENGTH: Limit = {
+  what: 'the wavelength',
+  allowed: '200 to 2500 nm',
+  isWithin: (nm) => nm >= 200 && nm <= 2500,
+}
+const THETA: Limit = { what: 'theta', allowed: '0 to below 90 degrees', isWithin: (deg) => deg >= 0 && deg < 90 }
+const PHI: Limit = { what: 'phi', allowed: '-360 to 360 degrees', isWithin: (deg) => Math.abs(deg) <= 360 }
+/** Noise may push a dark reading a little below nothing, a calibration a bright one above all. */
+const REFLECTANCE: Limit = {
+  what: 'the reflectance',
+  allowed: 'a fraction from 0 to 1',
+  isWithin: (share) => share >= -0.05 && share <= 1.5,
+  next: 'write percent as 4.2 %, or with % in the heading of the column',
 }
 
-function sorted({ wavelengthNm, reflectance, ...direction }: MeasuredSpectrum): MeasuredSpectrum {
-  const order = wavelengthNm.map((_, k) => k).sort((a, b) => wavelengthNm[a] - wavelengthNm[b])
+function limitFault({ line, directionLine, nm, thetaDeg, phiDeg, reflectance }: Reading): Fault | undefined {
+  const checks: [Limit, number, number][] = [
+    [WAVELENGTH, nm, line],
+    [THETA, thetaDeg, directionLine],
+    [PHI, phiDeg, directionLine],
+    [REFLECTANCE, reflectance, line],
+  ]
+  const missed = checks.find(([limit, value]) => !limit.isWithin(value))
+  if (missed === undefined) return undefined
+  const [{ what, allowed, next }, value, at] = missed
+  const message = `${what} is out of range`
+  return { code: 'out_of_range', line: at, message, received: `${value}`, allowed, ...(next !== undefined && { next }) }
+}
+
+/** Directions in the order of their first reading. */
+function spectraOf(readings: readonly Reading[]): MeasuredSpectrum[] | Fault {
+  const groups = new Map<string, Map<number, Reading>>()
+  for (const reading of readings) {
+    const fault = limitFault(reading)
+    if (fault !== undefined) return fault
+    const { thetaDeg, phiDeg, nm } = reading
+    const key = `${thetaDeg},${phiDeg}`
+    const group = groups.get(key) ?? new Map<number, Reading>()
+    groups.set(key, group)
+    if (group.has(nm)) return twice(reading)
+    group.set(nm, reading)
+  }
+  return [...groups.values()].map(spectrumOf)
+}
+
+function spectrumOf(group: ReadonlyMap<number, Reading>): MeasuredSpectrum {
+  const sorted = [...group.values()].sort((a, b) => a.nm - b.nm)
   return {
-    ...direction,
-    wavelengthNm: order.map((k) => wavelengthNm[k]),
-    reflectance: order.map((k) => reflectance[k]),
+    theta: radians(sorted[0].thetaDeg),
+    phi: radians(sorted[0].phiDeg),
+    wavelengthNm: sorted.map(({ nm }) => nm),
+    reflectance: sorted.map(({ reflectance }) => reflectance),
+  }
+}
+
+function twice({ line, nm, thetaDeg, phiDeg }: Reading): Fault {
+  return {
+    code: 'measured_twice',
+    line,
+    message: `${nm} nm is measured twice from theta ${thetaDeg}, phi ${phiDeg} degrees`,
+    allowed: 'one reading of each wavelength and direction',
+    next: 'average the readings, or leave one out',
   }
 }
 
@@ -146,12 +166,7 @@ function radians(degrees: number): number {
   return (degrees * Math.PI) / 180
 }
 
-function problemAt(
-  file: string,
-  text: string,
-  fault: Pick<Problem, 'code' | 'message' | 'received' | 'allowed' | 'next'>,
-  line?: number,
-): InputError {
+function problemAt(file: string, text: string, { line, ...fault }: Fault): InputError {
   const width = line === undefined ? 0 : (text.split('\n')[line - 1]?.length ?? 0)
   const range = line === undefined ? {} : { range: { line, column: 1, endLine: line, endColumn: width + 1 } }
   return new InputError([{ severity: 'error', path: '', file, ...fault, ...range }], new Map([[file, text]]))

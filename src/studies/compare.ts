@@ -6,7 +6,7 @@ import { byMerit } from '../search/problem.js'
 import type { OptimizeQuestion, Stack } from '../stack/stack.js'
 import { allChoices, cardsOf, questionWithin, type Slots, slotsOf } from './candidate.js'
 import { type CompareJob, type CompareShared, compareJob, type SearchedCandidate } from './compareJob.js'
-import { type RunJobs, searchInRounds } from './compareRounds.js'
+import { type Margins, type RunJobs, searchInRounds } from './compareRounds.js'
 import { type Candidate, candidateRequests, describeCandidate } from './describeCandidate.js'
 import { axisOf, cost, defaultFront, type FrontAxis, type FrontRequest, isMetric } from './frontAxis.js'
 import type { Hooks } from './hooks.js'
@@ -41,8 +41,8 @@ export interface Comparison {
   /** Indices into `candidates` of those that no other betters in every axis. */
   readonly front: readonly number[]
   readonly ruled_out: number
-  /** What the quick search that ruled candidates out is taken to fall short by at most, in the objective's unit. */
-  readonly margin?: number
+  /** Absent where none was ruled out. */
+  readonly margins?: Margins
   readonly interrupted: boolean
 }
 
@@ -79,7 +79,7 @@ export async function compare(
     front_axes: axes,
     front: nondominated(candidates.map((candidate) => axes.map((axis) => cost(candidate, axis, sense)))),
     ruled_out: ruledOut,
-    ...(ruledOut > 0 && { margin: rounds.margin }),
+    ...(rounds.margins && { margins: rounds.margins }),
     interrupted: !rounds.complete,
   }
 }

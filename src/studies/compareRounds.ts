@@ -25,10 +25,18 @@ export interface RoundSettings {
 export interface Rounds {
   /** In the order of the choices; undefined where not searched before a stop. */
   readonly found: readonly (FoundCandidate | undefined)[]
-  /** Bound taken for the shortfall of the quick search, in the objective's unit; 0 where there was none. */
-  readonly margin: number
+  /** Absent where none was ruled out. */
+  readonly margins?: Margins
   /** Nothing is left to be searched. */
   readonly complete: boolean
+}
+
+/** Bounds taken for what the quick search falls short by, in the objective's unit, as far as candidates were ruled out by them. */
+export interface Margins {
+  /** Where no constraint held the search. */
+  readonly free?: number
+  /** Where one did. */
+  readonly held?: number
 }
 
 export interface FoundCandidate extends SearchedCandidate {
@@ -68,7 +76,7 @@ export async function searchInRounds(
     all ? 1 : AFTER_PILOTS,
   )
   enter(full, pilots, pilotEnds)
-  if (all) return { found: together(full, pilotEnds), margin: 0, complete: !pilotEnds.includes(undefined) }
+  if (all) return { found: together(full, pilotEnds), complete: !pilotEnds.includes(undefined) }
   const designs = pilotEnds.flatMap((end) => end?.designs.slice(0, TAUGHT) ?? [])
   const quick = await run(
     choices.map((choice) => ({ kind: 'quick', choice, designs })),
@@ -76,7 +84,7 @@ export async function searchInRounds(
     AFTER_QUICK,
   )
   const broken = pilotEnds.includes(undefined) || !isComplete(quick)
-  const ruled = broken ? { margin: 0, complete: false } : await searchOpen(choices, settings, run, full, quick)
+  const ruled = broken ? { complete: false } : await searchOpen(choices, settings, run, full, quick)
   return { found: together(full, quick), ...ruled }
 }
 
@@ -87,17 +95,16 @@ async function searchOpen(
   run: RunJobs,
   full: Map<number, SearchedCandidate>,
   quick: readonly SearchedCandidate[],
-): Promise<Pick<Rounds, 'margin' | 'complete'>> {
+): Promise<Pick<Rounds, 'margins' | 'complete'>> {
   const begun = new Set<number>()
   for (let from = AFTER_QUICK, to = AFTER_FIRST_OPEN; ; [from, to] = [to, (1 + to) / 2]) {
     const margins = quick.map((end) => marginOf(full, quick, end.isHeld))
     const open = openCandidates(full, quick, keep, margins).filter((k) => !begun.has(k))
-    const margin = Math.max(0, ...margins.filter((_, k) => !full.has(k)))
-    if (open.length === 0) return { margin, complete: true }
+    if (open.length === 0) return { complete: true, ...usedMargins(full, quick, margins) }
     const jobs = open.map((k): CompareJob => ({ kind: 'full', choice: choices[k], from: quick[k].x }))
     const ends = await run(jobs, from, to)
     enter(full, open, ends)
-    if (!isComplete(ends)) return { margin, complete: false }
+    if (!isComplete(ends)) return { complete: false }
     for (const k of open) begun.add(k)
   }
 }
@@ -155,6 +162,18 @@ function shortfallBound({ value, violation }: SearchedCandidate, quick: Searched
   if (violation > 0) return 0
   if (quick.violation > 0) return Number.POSITIVE_INFINITY
   return Math.max(SAFETY * (quick.value - value), LEAST_MARGIN * Math.abs(value))
+}
+
+function usedMargins(
+  full: ReadonlyMap<number, SearchedCandidate>,
+  quick: readonly SearchedCandidate[],
+  margins: readonly number[],
+): Pick<Rounds, 'margins'> {
+  const used: { free?: number; held?: number } = {}
+  quick.forEach(({ isHeld }, k) => {
+    if (!full.has(k)) used[isHeld === true ? 'held' : 'free'] = margins[k]
+  })
+  return full.size < quick.length ? { margins: used } : {}
 }
 
 /** Those perhaps among the best `keep` but not yet searched by themselves, or found better by the quick search than so. */

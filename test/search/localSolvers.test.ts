@@ -136,3 +136,34 @@ describe.each<[string, Solver]>([
     expect(fixed).toMatchObject({ value: 9 + 36 + 7, evaluations: 1, reason: 'converged' })
   })
 })
+
+it('does not jam where a valley meets a bound', () => {
+  const unit = fc.double({ min: 0, max: 1, noNaN: true })
+  const variables = Array.from({ length: 3 }, () => ({ lower: 0, upper: 1 }))
+  let [runs, evaluations] = [0, 0]
+  fc.assert(
+    fc.property(
+      fc.array(unit, { minLength: 6, maxLength: 6 }),
+      fc.double({ min: -3, max: 0, noNaN: true }),
+      (u, depth) => {
+        const [steep, bend, floor] = [3 + 40 * u[0], 0.3 + 2 * u[1], 10 ** depth]
+        // Two coordinates in a curved valley whose floor falls toward the bound of the third.
+        const valley: ObjectiveWithGradient = ([a, b, c], gradient) => {
+          const side = a - b - bend * b * c
+          gradient[0] = 2 * steep * side + 2 * floor * (a - u[2]) + floor * c
+          gradient[1] = -2 * steep * side * (1 + bend * c) + 2 * floor * (b - u[3])
+          gradient[2] = -2 * steep * side * bend * b + floor * (1 + a)
+          return steep * side ** 2 + floor * ((a - u[2]) ** 2 + (b - u[3]) ** 2 + c * (1 + a))
+        }
+        const result = quasiNewton(valley, variables, [u[4], u[5], u[0]], { tolerance: 1e-13 })
+        expect(result.reason).not.toBe('limit')
+        expect(result.evaluations).toBeLessThan(200)
+        runs++
+        evaluations += result.evaluations
+      },
+    ),
+    { seed: 3, numRuns: 1000 },
+  )
+  // A search that takes steps across the bound needs 78.
+  expect(evaluations / runs).toBeLessThan(40)
+})

@@ -80,9 +80,11 @@ export const DARK: Theme = {
   ramp: darkRamp,
 }
 
-/** Style of the i-th series; more than five begin again. */
-export function seriesStyle(theme: Theme, index: number): SeriesStyle {
-  return theme.series[index % theme.series.length]
+/** Style of the i-th series; beyond five the colors begin again, each with the next dash and marker. */
+export function seriesStyle({ series }: Theme, index: number): SeriesStyle {
+  const round = Math.floor(index / series.length)
+  const { dash, marker } = series[(index + round) % series.length]
+  return { ...series[index % series.length], dash, marker }
 }
 
 /** CSS font of the theme. */

@@ -1,16 +1,19 @@
+import { findParameter } from '../stack/parameters.js'
 import type { Stack } from '../stack/stack.js'
 import type { Fit } from '../studies/fit.js'
 import type { SingleFault } from '../studies/singleFaults.js'
+import { fromPlain } from '../units/quantity.js'
 import { fixed } from './decimals.js'
 import { ESTIMATE_CAUTION } from './evaluateText.js'
 import { type Paint, PLAIN } from './paint.js'
 import { parameterText } from './parameterText.js'
 import { type Column, textTable } from './textTable.js'
+import { plural } from './wording.js'
 
 /** What the sample turned out to be, what cannot be told apart, and the single faults in order. */
 export function fitText(stack: Stack, fit: Fit, paint: Paint = PLAIN): string {
   const parts = [
-    `${paint.strong(fit.title)}\nfit to ${readings(fit)} readings from ${fit.directions.length} directions`,
+    `${paint.strong(fit.title)}\nfit to ${plural(readings(fit), 'reading')} from ${plural(fit.directions.length, 'direction')}`,
     parametersText(stack, fit),
     remainderText(fit),
     unresolvedText(fit, paint),
@@ -36,15 +39,19 @@ const PARAMETERS: readonly Column[] = [
 function parametersText(stack: Stack, { parameters }: Fit): string {
   const rows = Object.entries(parameters).map(([path, { value, std_error, nominal }]) => {
     const { unit, shown } = parameterText(stack, path)
-    const error = std_error === null ? 'at its bound' : errorText(shown, std_error)
+    const error = errorText(stack, path, std_error)
     return [path, unit, shown(nominal), shown(value), error, shown(value - nominal)]
   })
   return textTable(PARAMETERS, rows)
 }
 
-/** Errors finer than the decimals of the table keep two digits of their own. */
-function errorText(shown: (plain: number) => string, error: number): string {
-  const text = shown(error)
+/** Errors finer than the decimals of the table keep two digits of their own; one as wide as the range searched says nothing. */
+function errorText(stack: Stack, path: string, error: number | null): string {
+  if (error === null) return 'at its bound'
+  const range = stack.fit?.vary[path]
+  const kind = findParameter(stack, path)?.kind ?? 'number'
+  if (range !== undefined && 'from' in range && fromPlain(error, kind) > range.to - range.from) return 'unknown'
+  const text = parameterText(stack, path).shown(error)
   return Number(text) === 0 ? Number(error.toPrecision(2)).toString() : text
 }
 

@@ -5,6 +5,7 @@
 import { createSpectrumExperiment } from '../appearance/spectrumExperiment.js'
 import { fitFromStarts, type StartsResult } from '../search/fitFromStarts.js'
 import { findParameter, getParameter, setParameters } from '../stack/parameters.js'
+import { InputError } from '../stack/problem.js'
 import type { FitQuestion, Stack } from '../stack/stack.js'
 import { type QuantityKind, toPlain } from '../units/quantity.js'
 import { degrees } from './evaluate.js'
@@ -12,6 +13,7 @@ import { fitProblem, type Measured } from './fitProblem.js'
 import type { Hooks } from './hooks.js'
 import { mapInline, type ParallelMap, type Task } from './parallel.js'
 import { prepareStack } from './prepareStack.js'
+import { optionProblem } from './readVary.js'
 import { type SingleFault, singleFaults } from './singleFaults.js'
 import { stageHooks } from './stageHooks.js'
 import { type Unresolved, unresolvedCombinations } from './unresolved.js'
@@ -79,7 +81,10 @@ export const fitParameters: Task<Shared, StartsSettings, StartsResult> = {
   },
 }
 
-/** The stack must ask the question: `stack.fit` present. */
+/**
+ * The stack must ask the question: `stack.fit` present.
+ * @throws InputError where there are too few readings for so many parameters
+ */
 export async function fit(
   stack: Stack,
   measured: Measured,
@@ -92,6 +97,7 @@ export async function fit(
   const paths = Object.keys(question.vary)
   const kinds = paths.map((path) => findParameter(stack, path)?.kind ?? 'number')
   const problem = fitProblem(stack, measured, question)
+  requireReadings(problem.count, paths.length, question.noise !== undefined)
   const nominal = paths.map((path) => getParameter(stack, path))
   const shared = { stack, question, measured }
   const [fitted] = await map(fitParameters, shared, [settings], stageHooks(hooks, 0, 0.5))
@@ -130,6 +136,16 @@ export async function fit(
 async function asTheFileSays(shared: Shared): Promise<StartsResult> {
   const run = await fitParameters.prepare(shared)
   return run({ seed: 1, starts: 0, maxEvaluations: 1 })
+}
+
+/** As many as parameters; one more where they must tell their own noise. */
+function requireReadings(count: number, parameters: number, noiseIsStated: boolean): void {
+  const wanted = parameters + (noiseIsStated ? 0 : 1)
+  if (count >= wanted) return
+  const message = `too few readings for ${parameters} free parameters`
+  const next = 'measure more wavelengths or directions, or vary less'
+  const fault = { code: 'too_few_readings', message, received: `${count}`, allowed: `at least ${wanted}`, next }
+  throw new InputError([optionProblem('--measured', fault)])
 }
 
 function fittedParameter(value: number, error: number, nominal: number, kind: QuantityKind): FittedParameter {

@@ -23,7 +23,7 @@ export function readFront(stack: Stack, texts: readonly string[]): FrontRequest[
     stack,
     texts.filter((text) => named(text) === undefined),
     direction,
-    '--front',
+    { option: '--front', words: WORDS },
   )
   return texts.map((text) => named(text) ?? (metrics.shift() as MetricRequest))
 }

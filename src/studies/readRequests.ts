@@ -9,21 +9,23 @@ import { isFault, parseQuantity } from '../units/quantity.js'
 import { optionProblem } from './readVary.js'
 
 const FORM = 'name[/illuminance][@theta,phi], e.g. chroma@45deg,90deg or ambient_contrast/500lx'
+const METRIC_OPTION = { option: '--metric', words: [] } as const
 const GRAZING = Math.PI / 2
 
 /**
- * Metrics without a direction of their own look from `direction`; `option` is named in what is told of wrong ones.
+ * Metrics without a direction of their own look from `direction`. What is told of wrong ones names the option, and the words that
+ * it takes besides metrics.
  * @throws InputError with every problem found
  */
 export function readRequests(
   stack: Stack,
   texts: readonly string[],
   direction: Direction,
-  option = '--metric',
+  { option, words }: { readonly option: string; readonly words: readonly string[] } = METRIC_OPTION,
 ): MetricRequest[] {
   const problems: Problem[] = []
   const requests = texts.flatMap((text) => {
-    const request = readRequest(stack, text, direction)
+    const request = readRequest(stack, text, direction, words)
     if (!('code' in request)) return [request]
     problems.push(optionProblem(`${option} ${text}`, request))
     return []
@@ -32,11 +34,16 @@ export function readRequests(
   return requests
 }
 
-function readRequest(stack: Stack, text: string, elsewhere: Direction): MetricRequest | Fault {
+function readRequest(
+  stack: Stack,
+  text: string,
+  elsewhere: Direction,
+  words: readonly string[],
+): MetricRequest | Fault {
   const match = /^\s*([a-z_*0-9]+)(?:\/([^@]+))?(?:@([^,]+),(.+))?$/i.exec(text)
   if (match === null) return { code: 'bad_option', message: 'this names no metric', received: text, allowed: FORM }
   const [, name, level, theta, phi] = match
-  if (!isMetricName(name)) return unknownMetric(name)
+  if (!isMetricName(name)) return unknownMetric(name, words)
   const illuminance = level === undefined ? undefined : parseQuantity(level, 'illuminance')
   const angles = theta === undefined ? [] : [parseQuantity(theta, 'angle'), parseQuantity(phi, 'angle')]
   for (const value of [illuminance, ...angles]) {
@@ -72,13 +79,14 @@ function isMetricName(name: string): name is MetricName {
   return (METRIC_NAMES as readonly string[]).includes(name)
 }
 
-function unknownMetric(received: string): Fault {
-  const suggestion = nearestName(received, METRIC_NAMES)
+function unknownMetric(received: string, words: readonly string[]): Fault {
+  const names = [...words, ...METRIC_NAMES]
+  const suggestion = nearestName(received, names)
   return {
     code: 'unknown_metric',
     message: `there is no metric "${received.slice(0, 60)}"`,
     received: received.slice(0, 60),
-    allowed: shortList(METRIC_NAMES),
+    allowed: shortList(names),
     ...(suggestion !== undefined && { suggestion }),
   }
 }

@@ -52,7 +52,10 @@ describe.each([
     const gray = filterGrayscale(1)
     const [after, before] = theme.series.map(({ color }) => lab(gray(color))?.l ?? 0)
     expect(Math.abs(after - before)).toBeGreaterThan(15)
-    expect(seriesStyle(theme, theme.series.length)).toBe(theme.series[0])
+    const count = theme.series.length
+    const styles = Array.from({ length: count * count }, (_, k) => JSON.stringify(seriesStyle(theme, k)))
+    expect(new Set(styles).size).toBe(count * count)
+    expect(seriesStyle(theme, count).color).toBe(theme.series[0].color)
   })
 
   it('has a map scale of evenly rising lightness, to every kind of vision', () => {

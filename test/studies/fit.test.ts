@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { fitFromStarts } from '../../src/search/fitFromStarts.js'
+import { InputError } from '../../src/stack/problem.js'
 import type { RetarderLayer } from '../../src/stack/stack.js'
 import { type Fit, fit } from '../../src/studies/fit.js'
 import { fitProblem } from '../../src/studies/fitProblem.js'
@@ -210,4 +211,13 @@ it('keeps the best so far when stopped', async () => {
   const found = await fit(stack, { directions: CLEAN }, { seed: 1 }, { stopped: () => ++polled > 2 })
   expect(found.interrupted).toBe(true)
   expect(Object.keys(found.parameters)).toEqual(Object.keys(FOUR_PARAMETERS))
+})
+
+it('refuses fewer readings than parameters', async () => {
+  const three = { directions: measure(SAMPLE, [[0, 0]], [550, 600, 650]) }
+  const stated = fit(asking(laminate(), { vary: FOUR_PARAMETERS, noise: NOISE }), three, { seed: 1 })
+  await expect(stated).rejects.toThrow(InputError)
+  const four = { directions: measure(SAMPLE, [[0, 0]], [500, 550, 600, 650]) }
+  const estimated = fit(asking(laminate(), { vary: FOUR_PARAMETERS }), four, { seed: 1 })
+  await expect(estimated).rejects.toThrow(/too few readings/)
 })

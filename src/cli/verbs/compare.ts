@@ -2,6 +2,7 @@ import { compareSheets } from '../../report/compareSheets.js'
 import { compareText } from '../../report/compareText.js'
 import { csvText } from '../../report/csvText.js'
 import { jsonText } from '../../report/jsonText.js'
+import { plural } from '../../report/wording.js'
 import { type Comparison, compare } from '../../studies/compare.js'
 import { readFront } from '../../studies/frontAxis.js'
 import { chartFiles } from '../chartFiles.js'
@@ -31,7 +32,7 @@ export async function run(context: Context<CompareOptions>): Promise<ExitCode> {
   const stem = stemOf(file)
   const store = options.out === undefined ? undefined : compareStore(options.out, stem, stack, seed)
   if (store !== undefined && store.known.size > 0)
-    terminal.note(`${store.known.size} results are in hand from an earlier run\n`)
+    terminal.note(`in hand from an earlier run: ${plural(store.known.size, 'result')}\n`)
   const comparison = await runStudy(context, 'compare', (hooks, map) =>
     compare(stack, { seed, keep, exhaustive, ...(front && { front }) }, hooks, map, store),
   )

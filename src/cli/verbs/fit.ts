@@ -2,7 +2,9 @@ import { csvText } from '../../report/csvText.js'
 import { fitSheet } from '../../report/fitSheet.js'
 import { fitText } from '../../report/fitText.js'
 import { jsonText } from '../../report/jsonText.js'
-import { readMeasured } from '../../stack/readMeasured.js'
+import { plural } from '../../report/wording.js'
+import { type MeasuredSpectrum, readMeasured } from '../../stack/readMeasured.js'
+import type { Stack } from '../../stack/stack.js'
 import { type Fit, fit } from '../../studies/fit.js'
 import { chartFiles } from '../chartFiles.js'
 import type { Context } from '../context.js'
@@ -24,6 +26,8 @@ export async function run(context: Context<FitOptions>): Promise<ExitCode> {
   const { stack } = await loadStack(context)
   requireQuestion(stack, 'fit', file)
   const directions = readMeasured(readText(options.measured), options.measured)
+  const outside = readingsOutside(stack, directions)
+  if (outside > 0) terminal.note(`${outsideText(stack, outside)}\n`)
   if (options.out !== undefined) await checkFolder(options.out)
   const found = await runStudy(context, 'fit', (hooks, map) =>
     fit(stack, { directions }, { seed: options.seed }, hooks, map),
@@ -40,6 +44,17 @@ export async function run(context: Context<FitOptions>): Promise<ExitCode> {
     ])
   })
   return found.interrupted ? EXIT.interrupted : EXIT.done
+}
+
+/** How many readings lie beyond the wavelengths for which the file describes its films. */
+function readingsOutside({ conditions }: Stack, directions: readonly MeasuredSpectrum[]): number {
+  const { from, to } = conditions.wavelengths
+  return directions.flatMap(({ wavelengthNm }) => wavelengthNm).filter((nm) => nm < from || nm > to).length
+}
+
+function outsideText({ conditions: { wavelengths } }: Stack, count: number): string {
+  const band = `${wavelengths.from} to ${wavelengths.to} nm`
+  return `note: ${plural(count, 'reading')} outside the file's ${band}; tables of the file hold their last value there`
 }
 
 function residualsCsv({ directions }: Fit): string {

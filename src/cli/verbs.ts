@@ -135,11 +135,13 @@ export const VERBS: readonly Verb[] = [
     file: 'stack',
     options: [
       new Option('--seed <number>', 'of the searches').argParser(wholeNumber(0, 2 ** 31 - 1)).default(1),
-      new Option('--keep <number>', 'candidates that are searched in full').argParser(wholeNumber(1, 1e6)).default(20),
-      new Option('--exhaustive', 'search every candidate in full').default(false),
+      new Option('--keep <number>', 'how many of the best must each be searched by itself')
+        .argParser(wholeNumber(1, 1e6))
+        .default(20),
+      new Option('--exhaustive', 'search every candidate by itself, rule none out').default(false),
       new Option(
         '--front <axis>',
-        'an axis of the front: objective, price_per_m2, thickness_nm or a metric; repeatable',
+        'an axis of the front: objective, price_per_m2, thickness_nm or a metric such as chroma@45deg,90deg; repeatable',
       ).argParser(collected),
     ],
     example: 'compare stacks/dive-computer.stack.yaml --out out',

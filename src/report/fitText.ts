@@ -78,6 +78,7 @@ const FAULTS: readonly Column[] = [
 const MOST_FAULTS = 6
 
 function faultsText(stack: Stack, { single_faults, residual_rms }: Fit): string {
+  if (single_faults.length === 0) return 'single faults were not tried: the study was stopped before'
   const rows = single_faults
     .slice(0, MOST_FAULTS)
     .map((fault) => [
